@@ -1,0 +1,1 @@
+export default function Safety() { return <h1>Safety first</h1>; }

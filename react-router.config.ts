@@ -1,0 +1,15 @@
+import type { Config } from "@react-router/dev/config";
+
+export default {
+  ssr: true,
+  buildDirectory: process.env.KEYPEG_BUILD_DIR ?? "build",
+  routeDiscovery: { mode: "initial" },
+  prerender: ["/safety"],
+  future: {
+    v8_middleware: true,
+    v8_passThroughRequests: true,
+    v8_splitRouteModules: true,
+    v8_trailingSlashAwareDataRequests: true,
+    v8_viteEnvironmentApi: true,
+  },
+} satisfies Config;

@@ -1,0 +1,9 @@
+import { reactRouter } from "@react-router/dev/vite";
+import tailwindcss from "@tailwindcss/vite";
+import { defineConfig } from "vite";
+
+export default defineConfig({
+  plugins: [tailwindcss(), reactRouter()],
+  resolve: { alias: { "~": new URL("./app", import.meta.url).pathname } },
+  build: { assetsInlineLimit: 0 },
+});
