@@ -1,1 +1,3 @@
-export default function Home() { return <h1>Keypeg</h1>; }
+export default function Home() {
+  return <h1>Keypeg</h1>;
+}

@@ -1,1 +1,3 @@
-export default function Safety() { return <h1>Safety first</h1>; }
+export default function Safety() {
+  return <h1>Safety first</h1>;
+}

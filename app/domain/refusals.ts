@@ -1,0 +1,40 @@
+/** Every way a command can say no: one closed union, one HTTP status each. Words are in text/en/refusals. */
+export const REFUSAL_STATUS = {
+  "not-found": 404,
+  "not-allowed": 403,
+  invalid: 400,
+  "same-id-other-body": 422,
+  "in-progress": 409,
+  "not-clear": 409,
+  "already-ended": 409,
+  "own-red-tag": 403,
+  stale: 409,
+} as const;
+export type RefusalCode = keyof typeof REFUSAL_STATUS;
+
+/** A field at fault: a JSON pointer into the input and a text key. */
+export interface FieldFault {
+  pointer: string;
+  code: string;
+}
+
+export interface Refusal {
+  code: RefusalCode;
+  /** The fields at fault, for `invalid`. */
+  fields?: FieldFault[];
+  /** Machine-readable reasons, for `not-clear`. */
+  reasons?: unknown[];
+}
+
+export type Result<T> = { ok: true; value: T } | { ok: false; refusal: Refusal };
+
+export function ok<T>(value: T): Result<T> {
+  return { ok: true, value };
+}
+
+export function refuse(
+  code: RefusalCode,
+  more: Omit<Refusal, "code"> = {},
+): { ok: false; refusal: Refusal } {
+  return { ok: false, refusal: { code, ...more } };
+}
