@@ -7,7 +7,7 @@ function hyphenate(hex: string): string {
 /** An id: a UUID as lower-case text here, BINARY(16) in the table. */
 export const uuid = customType<{ data: string; driverData: Buffer }>({
   dataType: () => "binary(16)",
-  toDriver: (text) => Buffer.from(text.replaceAll("-", ""), "hex"),
+  toDriver: uuidBytes,
   fromDriver: (bytes) => hyphenate(bytes.toString("hex")),
 });
 
@@ -30,4 +30,9 @@ export function jsonOf<T>(name: string) {
     toDriver: (value) => JSON.stringify(value),
     fromDriver: (stored) => (typeof stored === "string" ? JSON.parse(stored) : stored),
   })(name);
+}
+
+/** An id as the bytes raw SQL needs. */
+export function uuidBytes(text: string): Buffer {
+  return Buffer.from(text.replaceAll("-", ""), "hex");
 }

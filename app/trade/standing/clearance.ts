@@ -21,16 +21,9 @@ function endOfWalk(walk: WalkFact, facts: StandingFacts, policy: StandingPolicy)
       end = Math.min(end, dayEnd.at);
     }
   }
-  if (policy.afterWalkEndsDay) {
-    for (const after of facts.walks) {
-      if (
-        after.kind === "after" &&
-        after.driverId === walk.driverId &&
-        after.countsFrom > walk.countsFrom
-      ) {
-        end = Math.min(end, after.countsFrom);
-      }
-    }
+  for (const after of facts.walks) {
+    const ends = after.kind === "after" && after.driverId === walk.driverId;
+    if (ends && after.countsFrom > walk.countsFrom) end = Math.min(end, after.countsFrom);
   }
   if (walk.kind === "takeover") {
     const base = facts.walks.find((candidate) => candidate.id === walk.baseWalkId);

@@ -51,6 +51,8 @@ export interface DayEndFact {
 
 export interface DueFact {
   kind: string;
+  /** Its last day, "YYYY-MM-DD" of the yard. */
+  dueOn: string;
   /** When it starts to hold, as an instant; null when it never holds. */
   holdsAt: number | null;
   /** When it starts to warn. */
@@ -80,8 +82,6 @@ export interface StandingFacts {
 export interface StandingPolicy {
   /** Longest a walk counts, hours; at most 24. */
   walkHours: number;
-  /** An *after* walk ends the day's work. */
-  afterWalkEndsDay: boolean;
   /** Sign-offs this many days older than the walk need no acknowledgement. */
   reviewDays: number;
 }

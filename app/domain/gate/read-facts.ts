@@ -1,0 +1,275 @@
+import { and, desc, eq, gt, inArray, isNull, sql } from "drizzle-orm";
+import type { Db } from "../../db/client";
+import { yards } from "../../db/schema/carriers";
+import { handovers, returns } from "../../db/schema/handovers";
+import { acknowledgements, runLimits, signOffs, tagChanges, tags } from "../../db/schema/tags";
+import { datedTests, fittings, rounds, trucks } from "../../db/schema/trucks";
+import { readings, walks } from "../../db/schema/walks";
+import type { StandingFacts, TagFact } from "../../trade/standing/facts";
+import { hours } from "../durations";
+import type { PolicySettings } from "../policy/settings";
+import { addDays, yardDay, yardInstant } from "../yard-day";
+import { roundFacts, testFacts, type YardClock } from "./due-facts";
+
+export interface TruckKey {
+  carrierId: string;
+  truckId: string;
+}
+
+/** A walk counts at most 24 h and a takeover rests on one such walk: three days hold them all. */
+const WALKS_BACK = hours(72);
+
+async function readTruck(db: Db, key: TruckKey) {
+  const [row] = await db
+    .select({
+      inService: trucks.inService,
+      gateFault: trucks.gateFault,
+      outHandover: trucks.outHandover,
+      tagsSeq: trucks.tagsSeq,
+      gateSeq: trucks.gateSeq,
+      setupVersion: trucks.setupVersion,
+      createdAt: trucks.createdAt,
+      zone: yards.zone,
+      shopOpensMinute: yards.shopOpensMinute,
+      openHandover: handovers.id,
+      openDriver: handovers.driverId,
+      openSince: handovers.decidedAt,
+    })
+    .from(trucks)
+    .innerJoin(yards, and(eq(yards.carrierId, trucks.carrierId), eq(yards.id, trucks.yardId)))
+    .leftJoin(
+      handovers,
+      and(eq(handovers.carrierId, trucks.carrierId), eq(handovers.openTruck, trucks.id)),
+    )
+    .where(and(eq(trucks.carrierId, key.carrierId), eq(trucks.id, key.truckId)));
+  if (!row) throw new Error("truck vanished inside its own transaction");
+  return row;
+}
+
+/** Open tags with the newest change and the newest run-with-limit of each. */
+export async function readOpenTags(db: Db, key: TruckKey, yard: YardClock): Promise<TagFact[]> {
+  const open = await db
+    .select()
+    .from(tags)
+    .where(
+      and(
+        eq(tags.carrierId, key.carrierId),
+        eq(tags.truckId, key.truckId),
+        isNull(tags.signedOffAt),
+      ),
+    )
+    .orderBy(tags.raisedAt, tags.id);
+  if (open.length === 0) return [];
+  const ids = open.map((tag) => tag.id);
+  const changesSeen = await db
+    .select()
+    .from(tagChanges)
+    .where(and(eq(tagChanges.carrierId, key.carrierId), inArray(tagChanges.tagId, ids)))
+    .orderBy(tagChanges.changedAt, tagChanges.id);
+  const leaves = await db
+    .select()
+    .from(runLimits)
+    .where(and(eq(runLimits.carrierId, key.carrierId), inArray(runLimits.tagId, ids)))
+    .orderBy(runLimits.signedAt, runLimits.id);
+  return open.map((tag) => {
+    const worse = changesSeen.filter((c) => c.tagId === tag.id && c.seen === "worse").at(-1);
+    const newestLeave = leaves.filter((leave) => leave.tagId === tag.id).at(-1);
+    // A tag found worse after the leave was signed ends that leave.
+    const leave =
+      newestLeave && (!worse || newestLeave.signedAt > worse.changedAt) ? newestLeave : undefined;
+    const event = leave
+      ? { id: leave.id, by: leave.signedBy }
+      : worse
+        ? { id: worse.id, by: worse.changedBy }
+        : { id: tag.id, by: tag.raisedBy };
+    return {
+      id: tag.id,
+      title: tag.title,
+      colour: worse?.colour ?? tag.colour,
+      limit: worse ? worse.limit : tag.limit,
+      roadSafety: tag.roadSafety,
+      raisedAt: tag.raisedAt.getTime(),
+      runUntil: leave
+        ? yardInstant(addDays(leave.untilDay, 1), yard.shopOpensMinute, yard.zone).getTime()
+        : null,
+      runLimit: leave?.limit ?? null,
+      eventId: event.id,
+      eventBy: event.by,
+    };
+  });
+}
+
+async function readWalks(db: Db, key: TruckKey, now: Date, setupVersion: number) {
+  const rows = await db
+    .select({
+      id: walks.id,
+      driverId: walks.driverId,
+      kind: walks.kind,
+      baseWalkId: walks.baseWalkId,
+      countsFrom: walks.countsFrom,
+      receivedAt: walks.receivedAt,
+      clearsNot: walks.clearsNot,
+      setupVersion: walks.setupVersion,
+      limits: walks.limits,
+    })
+    .from(walks)
+    .where(
+      and(
+        eq(walks.carrierId, key.carrierId),
+        eq(walks.truckId, key.truckId),
+        gt(walks.countsFrom, new Date(now.getTime() - WALKS_BACK)),
+      ),
+    )
+    .orderBy(walks.countsFrom, walks.id);
+  return rows.map(({ clearsNot, setupVersion: made, countsFrom, receivedAt, ...walk }) => ({
+    ...walk,
+    countsFrom: countsFrom.getTime(),
+    receivedAt: receivedAt.getTime(),
+    clears: clearsNot === null,
+    setupCurrent: made === setupVersion,
+  }));
+}
+
+async function readSeen(db: Db, key: TruckKey, since: Date) {
+  const signed = await db
+    .select({ id: signOffs.id, signedAt: signOffs.signedAt })
+    .from(signOffs)
+    .where(
+      and(
+        eq(signOffs.carrierId, key.carrierId),
+        eq(signOffs.truckId, key.truckId),
+        gt(signOffs.signedAt, since),
+      ),
+    );
+  // A leave to run can be older than the review window and still be in force: take every
+  // acknowledgement that may name it.
+  const seen = await db
+    .select({
+      driverId: acknowledgements.driverId,
+      items: acknowledgements.items,
+      satisfied: acknowledgements.satisfied,
+    })
+    .from(acknowledgements)
+    .where(
+      and(
+        eq(acknowledgements.carrierId, key.carrierId),
+        eq(acknowledgements.truckId, key.truckId),
+        gt(acknowledgements.receivedAt, new Date(since.getTime() - hours(24 * 150))),
+      ),
+    );
+  return {
+    signOffs: signed.map((s) => ({ id: s.id, signedAt: s.signedAt.getTime() })),
+    acknowledgements: seen,
+  };
+}
+
+async function readDayEnds(db: Db, key: TruckKey, now: Date) {
+  const rows = await db
+    .select({ driverId: returns.driverId, at: returns.returnedAt })
+    .from(returns)
+    .where(
+      and(
+        eq(returns.carrierId, key.carrierId),
+        eq(returns.truckId, key.truckId),
+        eq(returns.endsDay, true),
+        gt(returns.returnedAt, new Date(now.getTime() - WALKS_BACK)),
+      ),
+    );
+  return rows.map((row) => ({ driverId: row.driverId, at: row.at.getTime() }));
+}
+
+async function readDues(db: Db, key: TruckKey) {
+  const ofTruck = <T extends typeof rounds | typeof datedTests>(table: T) =>
+    and(eq(table.carrierId, key.carrierId), eq(table.truckId, key.truckId));
+  const done = await db
+    .select({ kind: rounds.kind, doneOn: rounds.doneOn, pumpHours: rounds.pumpHours })
+    .from(rounds)
+    .where(
+      and(
+        ofTruck(rounds),
+        sql`(${rounds.kind}, ${rounds.doneOn}) in (select kind, max(done_on) from rounds where carrier_id = ${rounds.carrierId} and truck_id = ${rounds.truckId} group by kind)`,
+      ),
+    );
+  const tests = await db
+    .select({ kind: datedTests.kind, dueOn: datedTests.dueOn })
+    .from(datedTests)
+    .where(ofTruck(datedTests))
+    .orderBy(datedTests.recordedAt, datedTests.id);
+  return { done, newest: [...new Map(tests.map((test) => [test.kind, test])).values()] };
+}
+
+async function readMeasures(db: Db, key: TruckKey) {
+  const [hoursRow] = await db
+    .select({ si: readings.si })
+    .from(readings)
+    .where(
+      and(
+        eq(readings.carrierId, key.carrierId),
+        eq(readings.truckId, key.truckId),
+        eq(readings.quantity, "pump-hours"),
+      ),
+    )
+    .orderBy(desc(readings.countsFrom), desc(readings.id))
+    .limit(1);
+  const [tank] = await db
+    .select({ attributes: fittings.attributes })
+    .from(fittings)
+    .where(
+      and(
+        eq(fittings.carrierId, key.carrierId),
+        eq(fittings.truckId, key.truckId),
+        eq(fittings.kind, "tank"),
+        isNull(fittings.removedAt),
+      ),
+    );
+  return { pumpHours: hoursRow?.si ?? 0, tankL: tank?.attributes.volumeL ?? null };
+}
+
+export interface FactsRead {
+  facts: StandingFacts;
+  tagsSeq: number;
+  gateSeq: number;
+}
+
+/** All base rows that decide a truck's standing: a fixed number of statements. */
+export async function readFacts(
+  db: Db,
+  key: TruckKey,
+  policy: PolicySettings,
+  now: Date,
+): Promise<FactsRead> {
+  const truck = await readTruck(db, key);
+  const yard = { zone: truck.zone, shopOpensMinute: truck.shopOpensMinute };
+  const since = new Date(now.getTime() - WALKS_BACK - hours(24 * policy.reviewDays));
+  const openTags = await readOpenTags(db, key, yard);
+  const walkFacts = await readWalks(db, key, now, truck.setupVersion);
+  const seen = await readSeen(db, key, since);
+  const dayEnds = await readDayEnds(db, key, now);
+  const dues = await readDues(db, key);
+  const { pumpHours, tankL } = await readMeasures(db, key);
+  const entered = yardDay(truck.createdAt, truck.zone).day;
+  return {
+    tagsSeq: truck.tagsSeq,
+    gateSeq: truck.gateSeq,
+    facts: {
+      inService: truck.inService,
+      gateFault: truck.gateFault,
+      out:
+        truck.openHandover === null
+          ? null
+          : {
+              handoverId: truck.openHandover,
+              driverId: truck.openDriver!,
+              since: truck.openSince!.getTime(),
+            },
+      tankL,
+      pumpHours,
+      openTags,
+      ...seen,
+      walks: walkFacts,
+      dayEnds,
+      rounds: roundFacts(dues.done, entered, yard, policy),
+      tests: testFacts(dues.newest, yard, policy),
+    },
+  };
+}
