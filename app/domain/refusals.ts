@@ -8,6 +8,10 @@ export const REFUSAL_STATUS = {
   "not-clear": 409,
   "already-ended": 409,
   "own-red-tag": 403,
+  "second-certifier": 403,
+  "two-people": 403,
+  "not-from-photos": 403,
+  "nothing-to-limit": 409,
   stale: 409,
 } as const;
 export type RefusalCode = keyof typeof REFUSAL_STATUS;

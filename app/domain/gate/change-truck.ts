@@ -28,6 +28,7 @@ export class GateChange {
   tagsMoved = false;
   readonly notes: Change[] = [];
   receipt: ReceiptToWrite | null = null;
+  readonly afterwards: ((standing: Standing) => Promise<void>)[] = [];
 
   constructor(
     readonly tx: Db,
@@ -39,6 +40,11 @@ export class GateChange {
   /** A tag, a colour, a sign-off, a run-with-limit or a "not satisfied" came: clearances must be earned again. */
   moveTags(): void {
     this.tagsMoved = true;
+  }
+
+  /** Work that needs the standing that follows: mail, mostly. Runs before the feed is written. */
+  after(work: (standing: Standing) => Promise<void>): void {
+    this.afterwards.push(work);
   }
 
   /** A row for the change feed. */
@@ -204,11 +210,18 @@ export async function changeTruck<T>(
           .where(and(eq(trucks.carrierId, key.carrierId), eq(trucks.id, key.truckId)));
       }
       const after = await deriveGate(tx, key, policy, now);
+      for (const work of change.afterwards) await work(after);
       if (change.receipt) {
-        const { body, ...row } = change.receipt;
-        await tx
-          .insert(receipts)
-          .values({ carrierId: key.carrierId, ...row, body: body(after), receivedAt: now });
+        const { id, kind, hash, personId, body } = change.receipt;
+        await tx.insert(receipts).values({
+          carrierId: key.carrierId,
+          id,
+          kind,
+          hash,
+          personId,
+          body: body(after),
+          receivedAt: now,
+        });
       }
       await writeChanges(tx, key.carrierId, now, [
         ...change.notes,
