@@ -31,6 +31,7 @@ export async function makeCarrier(
   db: Db,
   clock: Clock,
   settings: Partial<PolicySettings> = {},
+  zone = "America/Denver",
 ): Promise<TestCarrier> {
   const carrierId = uuidv7();
   const yardId = uuidv7();
@@ -45,7 +46,7 @@ export async function makeCarrier(
     carrierId,
     id: yardId,
     name: "Home Yard",
-    zone: "America/Denver",
+    zone,
     elevationM: 240,
     createdAt,
   });

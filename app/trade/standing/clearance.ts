@@ -72,12 +72,21 @@ export function clearances(facts: StandingFacts, policy: StandingPolicy): Cleara
   }));
 }
 
-/** The *before* walk whose skipped halves limit the truck now, or null. */
-export function walkInForce(facts: StandingFacts): WalkFact | null {
+/**
+ * The *before* walk whose skipped halves limit the truck at `now` (ms), or null: the newest
+ * that counts. It outlives its driver's day, since a takeover may rest on it, but never 24 h.
+ */
+export function walkInForce(facts: StandingFacts, now: number): WalkFact | null {
   let newest: WalkFact | null = null;
   for (const walk of facts.walks) {
     if (walk.kind !== "before" || !walk.clears || !walk.setupCurrent) continue;
+    if (endOfForce(walk) <= now) continue;
     if (!newest || walk.countsFrom > newest.countsFrom) newest = walk;
   }
   return newest;
+}
+
+/** The last instant at which a walk's skipped halves can still limit the truck, ms. */
+export function endOfForce(walk: WalkFact): number {
+  return walk.countsFrom + DAY;
 }

@@ -1,5 +1,5 @@
 import { foldLimits, type Limit, type LimitsInForce } from "../limits";
-import { type Clearance, clearances, walkInForce } from "./clearance";
+import { type Clearance, clearances, endOfForce, walkInForce } from "./clearance";
 import type { StandingFacts, StandingPolicy } from "./facts";
 
 /** One word for a truck now. */
@@ -51,14 +51,14 @@ function earliest(values: readonly (number | null)[]): number | null {
 }
 
 /** The limits in force: open tags', and those of halves the walk in force skipped. */
-function limitsInForce(facts: StandingFacts): Limit[] {
+function limitsInForce(facts: StandingFacts, now: number): Limit[] {
   const limits: Limit[] = [];
   for (const tag of facts.openTags) {
     if (tag.colour !== "yellow") continue;
     const limit = tag.runUntil === null ? tag.limit : tag.runLimit;
     if (limit) limits.push(limit);
   }
-  return [...limits, ...(walkInForce(facts)?.limits ?? [])];
+  return [...limits, ...(walkInForce(facts, now)?.limits ?? [])];
 }
 
 function gateColumns(facts: StandingFacts, limits: Limit[]): GateColumns {
@@ -113,6 +113,7 @@ function walkReasons(held: readonly Clearance[], now: number): Reason[] {
 function nextChange(facts: StandingFacts, held: readonly Clearance[], now: number): number | null {
   const instants = [
     ...held.map((clearance) => clearance.validUntil),
+    ...facts.walks.filter((walk) => walk.limits.length > 0).map(endOfForce),
     ...facts.openTags.map((tag) => tag.runUntil),
     ...facts.tests.flatMap((test) => [test.holdsAt, test.warnsAt]),
     ...facts.rounds.flatMap((round) => [round.holdsAt, round.warnsAt]),
@@ -129,7 +130,7 @@ function nextChange(facts: StandingFacts, held: readonly Clearance[], now: numbe
  */
 export function standing(facts: StandingFacts, policy: StandingPolicy, now: number): Standing {
   const held = clearances(facts, policy);
-  const limits = limitsInForce(facts);
+  const limits = limitsInForce(facts, now);
   const holdReasons = holds(facts, now);
   const due = walkReasons(held, now);
   const limitReasons = limits.map((limit): Reason => ({ code: "limit", limit }));
