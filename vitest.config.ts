@@ -15,7 +15,6 @@ export default defineConfig({
           name: "server",
           include: ["tests/server/**/*.test.{ts,tsx}"],
           environment: "node",
-          setupFiles: ["tests/server/setup.ts"],
           testTimeout: 30_000,
           hookTimeout: 60_000,
         },

@@ -1,0 +1,84 @@
+import { z } from "zod";
+
+/** Secrets that stand in the project for everyone to read: good for the demo, for nothing else. */
+const DEMO_SECRETS = new Set(["keypeg-demo-secret-known-to-everyone", "S3RVER"]);
+
+const environment = z.object({
+  KEYPEG_DATABASE_URL: z.url({ protocol: /^mysql$/ }),
+  KEYPEG_S3_ENDPOINT: z.url(),
+  KEYPEG_S3_PUBLIC_ENDPOINT: z.url().optional(),
+  KEYPEG_S3_REGION: z.string().min(1).default("us-east-1"),
+  KEYPEG_S3_BUCKET: z.string().min(3),
+  KEYPEG_S3_ACCESS_KEY_ID: z.string().min(1),
+  KEYPEG_S3_SECRET_ACCESS_KEY: z.string().min(1),
+  KEYPEG_SMTP_URL: z.url({ protocol: /^smtps?$/ }),
+  KEYPEG_MAIL_FROM: z.string().min(3),
+  KEYPEG_SECRET: z.string().min(32, "must have at least 32 characters"),
+  KEYPEG_PUBLIC_ORIGIN: z.url({ protocol: /^https?$/ }),
+  KEYPEG_DEMO: z.enum(["0", "1"]).default("0"),
+  KEYPEG_LOG_LEVEL: z.enum(["debug", "info", "warn", "error", "silent"]).default("info"),
+});
+
+export interface Config {
+  databaseUrl: string;
+  s3: {
+    endpoint: string;
+    publicEndpoint: string;
+    region: string;
+    bucket: string;
+    accessKeyId: string;
+    secretAccessKey: string;
+  };
+  smtpUrl: string;
+  mailFrom: string;
+  secret: string;
+  publicOrigin: string;
+  demo: boolean;
+  logLevel: string;
+}
+
+/** Thrown with one line for each value that is missing or wrong. */
+export class ConfigError extends Error {}
+
+/** Reads the environment. Every fault is named at once; demo secrets are refused in production. */
+export function readConfig(env: Record<string, string | undefined>): Config {
+  const parsed = environment.safeParse(env);
+  if (!parsed.success) {
+    const lines = parsed.error.issues.map((issue) => {
+      const name = String(issue.path[0]);
+      return env[name] === undefined ? `${name} is not set` : `${name}: ${issue.message}`;
+    });
+    throw new ConfigError(`The environment is not complete:\n  ${lines.join("\n  ")}`);
+  }
+  const e = parsed.data;
+  const demo = e.KEYPEG_DEMO === "1";
+  const known = [e.KEYPEG_SECRET, e.KEYPEG_S3_SECRET_ACCESS_KEY].some((s) => DEMO_SECRETS.has(s));
+  if (known && !demo && env.NODE_ENV === "production") {
+    throw new ConfigError("A demo secret is set outside the demo. Set secrets of your own.");
+  }
+  return {
+    databaseUrl: e.KEYPEG_DATABASE_URL,
+    s3: {
+      endpoint: e.KEYPEG_S3_ENDPOINT,
+      publicEndpoint: e.KEYPEG_S3_PUBLIC_ENDPOINT ?? e.KEYPEG_S3_ENDPOINT,
+      region: e.KEYPEG_S3_REGION,
+      bucket: e.KEYPEG_S3_BUCKET,
+      accessKeyId: e.KEYPEG_S3_ACCESS_KEY_ID,
+      secretAccessKey: e.KEYPEG_S3_SECRET_ACCESS_KEY,
+    },
+    smtpUrl: e.KEYPEG_SMTP_URL,
+    mailFrom: e.KEYPEG_MAIL_FROM,
+    secret: e.KEYPEG_SECRET,
+    publicOrigin: new URL(e.KEYPEG_PUBLIC_ORIGIN).origin,
+    demo,
+    logLevel: e.KEYPEG_LOG_LEVEL,
+  };
+}
+
+let read: Config | null = null;
+
+/** The process's configuration, read on first use. */
+export function config(): Config {
+  read ??= readConfig(process.env);
+  return read;
+}

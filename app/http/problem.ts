@@ -1,0 +1,48 @@
+import type { FieldFault, Refusal } from "../domain/refusals";
+import { REFUSAL_STATUS } from "../domain/refusals";
+import { refusalText } from "../text/en/refusals";
+
+export interface ProblemError {
+  /** What to do about it. */
+  detail: string;
+  /** JSON pointer to the field at fault. */
+  pointer: string;
+}
+
+/** RFC 9457 problem details. `code` is stable; `detail` is for people. */
+export function problem(
+  status: number,
+  code: string,
+  more: { title: string; detail?: string; errors?: ProblemError[]; reasons?: unknown[] },
+): Response {
+  return new Response(
+    JSON.stringify({ type: `urn:keypeg:problem:${code}`, status, code, ...more }),
+    { status, headers: { "Content-Type": "application/problem+json", "Cache-Control": "no-store" } },
+  );
+}
+
+function fieldErrors(fields: readonly FieldFault[]): ProblemError[] {
+  return fields.map(({ pointer, code }) => ({ pointer: `#${pointer}`, detail: refusalText.field(code) }));
+}
+
+/** A command's refusal as problem details. */
+export function refusalProblem(refusal: Refusal): Response {
+  return problem(REFUSAL_STATUS[refusal.code], refusal.code, {
+    title: refusalText.title(refusal.code),
+    ...(refusal.fields && { errors: fieldErrors(refusal.fields) }),
+    ...(refusal.reasons && { reasons: refusal.reasons }),
+  });
+}
+
+/** Zod's issues as problem details: one error a field, each with its pointer. */
+export function invalidProblem(
+  issues: readonly { path: readonly PropertyKey[]; message: string }[],
+): Response {
+  return problem(400, "invalid", {
+    title: refusalText.title("invalid"),
+    errors: issues.map((issue) => ({
+      pointer: `#/${issue.path.map(String).join("/")}`,
+      detail: refusalText.field(issue.message),
+    })),
+  });
+}

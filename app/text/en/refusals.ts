@@ -1,0 +1,36 @@
+import type { RefusalCode } from "../../domain/refusals";
+
+const TITLES: Record<RefusalCode, string> = {
+  "not-found": "There is no such record here.",
+  "not-allowed": "You may not do this.",
+  invalid: "Some of this needs another look.",
+  "same-id-other-body": "This was already sent with other content. Both are kept for the office.",
+  "in-progress": "This is still being worked on. Try again in a moment.",
+  "not-clear": "The key stays on the peg.",
+  "already-ended": "This has already been ended.",
+  "own-red-tag": "Whoever raised a red tag does not sign it off. Ask a certifier.",
+  "second-certifier": "The driver was not satisfied with your sign-off. A second certifier must look.",
+  "two-people": "Your firm asks for a second person: whoever found it does not sign it off.",
+  "not-from-photos": "This one is signed off at the truck, not from photos.",
+  "nothing-to-limit": "Only a yellow tag can run under a limit.",
+  stale: "The truck changed while you were looking. Look again.",
+};
+
+const FIELDS: Record<string, string> = {
+  "signature-empty": "Type your name to sign.",
+  "reason-empty": "Say why no repair is needed.",
+  "run-name-empty": "Name the run.",
+  "date-past": "Choose today or a later day.",
+  "date-future": "Choose today or an earlier day.",
+  "unknown-walk": "That walk is not on this truck.",
+  "unknown-tag": "This photo names a tag that is not in the walk.",
+  "too-many-photos": "Six photos a tag at most.",
+  "takeover-needs-base": "A takeover names the walk it takes over; other walks name none.",
+  "not-a-sha256": "Send the SHA-256 as 64 hex digits.",
+};
+
+/** Words for refusals: one table for commands, one for fields. */
+export const refusalText = {
+  title: (code: RefusalCode): string => TITLES[code],
+  field: (code: string): string => FIELDS[code] ?? code,
+};

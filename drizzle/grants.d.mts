@@ -1,0 +1,1 @@
+export function grants(database: string, user: string): string[];
