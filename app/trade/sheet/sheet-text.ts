@@ -1,0 +1,39 @@
+import type { StationKey } from "./check";
+
+/** What a line of text may say about the truck it is for. Numbers are in `unit`. */
+export interface TextFacts {
+  /** The expected number at a count, or how many the fitting stands for. */
+  count: number;
+  /** Type from the fitting's plate: "vane", "liquid-ring", "right-angle" … */
+  type: string | null;
+  low: number | null;
+  high: number | null;
+  setPoint: number | null;
+  stop: number | null;
+  unit: string;
+  winter: boolean;
+  towed: boolean;
+}
+
+type Line = string | ((facts: TextFacts) => string);
+
+export interface CheckText {
+  label: Line;
+  /** One line: what good looks like. */
+  good: Line;
+  problems: Readonly<Record<string, string>>;
+  steps?: readonly string[] | ((facts: TextFacts) => readonly string[]);
+}
+
+export interface StationText {
+  label: string;
+  engine: Line;
+}
+
+/** The words of a sheet, apart from its rules. Checks by key, without the fitting's number. */
+export interface SheetText {
+  stations: Readonly<Record<StationKey, StationText>>;
+  checks: Readonly<Record<string, CheckText>>;
+  couldNotCheck: string;
+  notFitted: string;
+}
