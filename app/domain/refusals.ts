@@ -20,7 +20,11 @@ export type RefusalCode = keyof typeof REFUSAL_STATUS;
 export interface FieldFault {
   pointer: string;
   code: string;
+  /** What the words name beside the field: a limit, a unit. */
+  values?: FaultValues;
 }
+
+export type FaultValues = Readonly<Record<string, string | number>>;
 
 export interface Refusal {
   code: RefusalCode;

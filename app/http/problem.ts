@@ -22,7 +22,10 @@ export function problem(
 }
 
 function fieldErrors(fields: readonly FieldFault[]): ProblemError[] {
-  return fields.map(({ pointer, code }) => ({ pointer: `#${pointer}`, detail: refusalText.field(code) }));
+  return fields.map(({ pointer, code, values }) => ({
+    pointer: `#${pointer}`,
+    detail: refusalText.field(code, values),
+  }));
 }
 
 /** A command's refusal as problem details. */
