@@ -1,4 +1,5 @@
-import type { RefusalCode } from "../../domain/refusals";
+import type { FaultValues, RefusalCode } from "../../domain/refusals";
+import { SETUP_FAULTS } from "./setup-faults";
 
 const TITLES: Record<RefusalCode, string> = {
   "not-found": "There is no such record here.",
@@ -16,7 +17,10 @@ const TITLES: Record<RefusalCode, string> = {
   stale: "The truck changed while you were looking. Look again.",
 };
 
-const FIELDS: Record<string, string> = {
+type Words = string | ((values: FaultValues) => string);
+
+const FIELDS: Record<string, Words> = {
+  ...SETUP_FAULTS,
   "signature-empty": "Type your name to sign.",
   "reason-empty": "Say why no repair is needed.",
   "run-name-empty": "Name the run.",
@@ -32,5 +36,8 @@ const FIELDS: Record<string, string> = {
 /** Words for refusals: one table for commands, one for fields. */
 export const refusalText = {
   title: (code: RefusalCode): string => TITLES[code],
-  field: (code: string): string => FIELDS[code] ?? code,
+  field: (code: string, values: FaultValues = {}): string => {
+    const words = FIELDS[code] ?? code;
+    return typeof words === "function" ? words(values) : words;
+  },
 };
