@@ -37,6 +37,8 @@ export interface ProblemEntry {
   driverFix?: boolean;
   remote?: boolean;
   part?: RoadSafetyPart;
+  /** Only on trucks this is true of. */
+  when?: (truck: TruckParts) => boolean;
   /** Set: only a certifier standing at the truck ends it, whatever else is said here. */
   atTheTruck?: AtTheTruck;
 }
@@ -77,7 +79,11 @@ export const NO_PRESSURE: Limit = { kind: "no-pressure-off-load" };
 export const NO_TOWING: Limit = { kind: "no-towing" };
 
 type More = Omit<ProblemEntry, "key" | "colour">;
-export const red = (key: string, more: More = {}): ProblemEntry => ({ key, colour: "red", ...more });
+export const red = (key: string, more: More = {}): ProblemEntry => ({
+  key,
+  colour: "red",
+  ...more,
+});
 export const yellow = (key: string, more: More = {}): ProblemEntry => ({
   key,
   colour: "yellow",
@@ -111,3 +117,8 @@ export function hoseLeft(truck: TruckParts): Limit {
   const left = lengths.reduce((sum, one) => sum + one, 0) - Math.max(0, ...lengths);
   return left > 0 ? { kind: "hose-no-longer", hoseM: left } : NO_VACUUM;
 }
+
+/** Type of the pump as on its plate; a vane pump where nothing is said. */
+export const pumpType = (truck: TruckParts) => truck.first("pump")?.attributes.type ?? "vane";
+/** How the pump is driven; by a shaft where nothing is said. */
+export const driveType = (truck: TruckParts) => truck.first("drive")?.attributes.type ?? "shaft";

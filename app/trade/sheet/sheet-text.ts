@@ -4,6 +4,8 @@ import type { StationKey } from "./check";
 export interface TextFacts {
   /** The expected number at a count, or how many the fitting stands for. */
   count: number;
+  /** Which of several alike this is, from 1; null where the truck has one. */
+  nth: number | null;
   /** Type from the fitting's plate: "vane", "liquid-ring", "right-angle" … */
   type: string | null;
   low: number | null;
@@ -36,4 +38,6 @@ export interface SheetText {
   checks: Readonly<Record<string, CheckText>>;
   couldNotCheck: string;
   notFitted: string;
+  /** The problem answer of a carrier's own check. */
+  notRight: string;
 }

@@ -1,0 +1,162 @@
+import {
+  type CheckEntry,
+  fillShare,
+  hoseLeft,
+  NO_PRESSURE,
+  NO_TOWING,
+  NO_VACUUM,
+  red,
+  white,
+  yellow,
+} from "../catalogue-entry";
+
+/** Engine on, lights on: the end the load comes out of. */
+export const rear: readonly CheckEntry[] = [
+  {
+    key: "rear.lamps",
+    kind: "look",
+    part: "lighting",
+    walks: ["before", "takeover"],
+    problems: [
+      red("brake-or-turn", { driverFix: true }),
+      red("tail", { driverFix: true }),
+      yellow("marker-or-plate", { driverFix: true }),
+      yellow("reflector"),
+    ],
+  },
+  {
+    key: "rear.door",
+    kind: "look",
+    from: ["rear-door"],
+    caution: "clamp-under-pressure",
+    locksRunUp: true,
+    problems: [
+      red("clamp-loose", { atTheTruck: "clamps" }),
+      red("clamp-gone", { atTheTruck: "clamps" }),
+      red("hinge-or-prop", { atTheTruck: "clamps" }),
+      red("leaks", { atTheTruck: "clamps" }),
+      yellow("seal-weeps", { limit: NO_PRESSURE, atTheTruck: "clamps" }),
+    ],
+  },
+  {
+    key: "rear.manway",
+    kind: "look",
+    from: ["manway"],
+    caution: (truck) => (truck.yard.winter ? "iced-ladder" : "fall"),
+    locksRunUp: true,
+    problems: [
+      red("clamp-loose", { atTheTruck: "clamps" }),
+      red("clamp-gone", { atTheTruck: "clamps" }),
+      yellow("gasket", { limit: NO_PRESSURE, atTheTruck: "clamps" }),
+      yellow("ladder", { when: (truck) => truck.has("ladder") }),
+    ],
+    // An iced ladder is not climbed: the truck may roll, but not under pressure with clamps unseen.
+    couldNotCheck: { colour: "yellow", limit: NO_PRESSURE },
+  },
+  {
+    key: "rear.valves",
+    kind: "look",
+    from: ["valve"],
+    caution: "stored-pressure",
+    walks: ["before", "after"],
+    problems: [
+      red("leaks"),
+      red("will-not-shut"),
+      yellow("drips", { limit: NO_PRESSURE }),
+      yellow("handle", { limit: NO_PRESSURE }),
+    ],
+  },
+  {
+    key: "rear.caps",
+    kind: "count",
+    from: ["cap"],
+    caution: "stored-pressure",
+    walks: ["before", "after", "takeover"],
+    locksRunUp: true,
+    expected: (truck) => truck.count("cap"),
+    problems: [
+      red("missing", { driverFix: true }),
+      red("will-not-lock"),
+      yellow("gasket-weeps", { limit: hoseLeft, driverFix: true }),
+      white("ear-bent"),
+    ],
+  },
+  {
+    key: "rear.sight-glass",
+    kind: "look",
+    each: "sight-glass",
+    locksRunUp: true,
+    problems: [
+      red("cracked", { atTheTruck: "cracked-glass" }),
+      red("leaks", { atTheTruck: "cracked-glass" }),
+      yellow("cannot-read", { limit: fillShare(0.75) }),
+      white("hazed"),
+    ],
+  },
+  {
+    key: "rear.placards",
+    kind: "look",
+    problems: [
+      yellow("placard", { limit: { kind: "no-hazmat" }, remote: true }),
+      yellow("plate", { remote: true }),
+      white("name-or-number"),
+    ],
+  },
+  {
+    // Always there on a powered truck: a hitch that nobody entered is still looked at.
+    key: "rear.coupling",
+    kind: "look",
+    part: "coupling",
+    when: (truck) => truck.kind === "powered" && !truck.has("hitch"),
+    walks: ["before", "takeover"],
+    problems: [
+      red("rear-guard", { atTheTruck: "frame" }),
+      yellow("tow-hook", { limit: NO_TOWING, atTheTruck: "coupling" }),
+      yellow("hitch-found", { limit: NO_TOWING, atTheTruck: "coupling" }),
+    ],
+  },
+  {
+    key: "rear.hitch",
+    kind: "look",
+    part: "coupling",
+    from: ["hitch"],
+    when: (truck) => truck.kind === "powered",
+    walks: ["before", "takeover"],
+    problems: [
+      red("loose-on-frame", { atTheTruck: "coupling" }),
+      red("rear-guard", { atTheTruck: "frame" }),
+      yellow("worn", { limit: NO_TOWING, atTheTruck: "coupling" }),
+      yellow("pin-or-latch", { limit: NO_TOWING, atTheTruck: "coupling" }),
+      yellow("chain-or-lines", { limit: NO_TOWING, atTheTruck: "coupling" }),
+    ],
+  },
+  {
+    key: "rear.washed-out",
+    kind: "look",
+    from: ["tank"],
+    caution: "tank-air",
+    walks: ["after"],
+    problems: [
+      red("tank-leaks"),
+      yellow("solids-left", { limit: fillShare(0.75) }),
+      yellow("shutoff-trips-early", {
+        limit: fillShare(0.75),
+        when: (truck) => truck.has("primary-shutoff"),
+      }),
+      white("not-washed"),
+    ],
+  },
+  {
+    key: "rear.glasses-out",
+    kind: "look",
+    cadence: "monthly",
+    who: "shop",
+    from: ["sight-glass"],
+    caution: "stored-vacuum",
+    problems: [
+      red("cracked", { atTheTruck: "cracked-glass" }),
+      yellow("gasket", { limit: NO_PRESSURE }),
+      yellow("frame-bent", { limit: NO_VACUUM }),
+    ],
+  },
+];
