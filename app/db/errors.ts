@@ -18,6 +18,8 @@ function codeOf(error: unknown): string | null {
 }
 
 export const DUPLICATE_KEY = 1062;
+/** The row referred to is not there. */
+export const FOREIGN_KEY = 1452;
 
 /** Deadlock, lock wait, snapshot conflict, node not ready, certification failure. */
 const TRANSIENT = new Set([1213, 1205, 1020, 1047, 1180]);
