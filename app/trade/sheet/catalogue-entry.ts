@@ -101,9 +101,8 @@ export const white = (key: string, more: More = {}): ProblemEntry => ({
 export function fillShare(share: number): (truck: TruckParts) => Limit | null {
   return (truck) => {
     const litres = truck.first("tank")?.attributes.volumeL;
-    return litres === undefined
-      ? null
-      : { kind: "fill-no-more", fillL: Math.round(litres * share) };
+    if (litres === undefined) return null;
+    return { kind: "fill-no-more", fillL: Math.round(litres * share * 10) / 10 };
   };
 }
 

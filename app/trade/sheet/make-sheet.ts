@@ -80,24 +80,32 @@ function worst(problems: readonly { colour: Colour }[]): Colour {
 
 function couldNotCheck(truck: TruckParts, entry: CheckEntry, own: readonly Problem[]) {
   if (entry.couldNotCheck) {
-    const { colour, lowest, limit } = entry.couldNotCheck;
-    return { colour, lowest: lowest ?? colour, limit: limitFor(truck, limit) };
+    const { colour, lowest = colour, limit } = entry.couldNotCheck;
+    return { colour, lowest, limit: lowest === "red" ? null : limitFor(truck, limit) };
   }
   const colour = worst(own);
+  const lowest = isRoadSafety(entry) ? colour : DOWN[colour];
   const limit = own.find((problem) => problem.colour === "yellow" && problem.limit)?.limit ?? null;
-  return { colour, lowest: isRoadSafety(entry) ? colour : DOWN[colour], limit };
+  return { colour, lowest, limit: lowest === "red" ? null : limit };
 }
 
 function isRoadSafety(entry: CheckEntry): boolean {
   return entry.roadSafety ?? entry.part !== undefined;
 }
 
+/** A truck without its tank or its pump is another truck: that is for the office, not for an answer. */
 function mayBeNotFitted(entry: CheckEntry): boolean {
-  const made = entry.from !== undefined || entry.each !== undefined;
+  const kinds = [...(entry.from ?? []), ...(entry.each ? [entry.each] : [])];
+  const made = kinds.length > 0 && !kinds.includes("tank") && !kinds.includes("pump");
   return made && !isRoadSafety(entry) && !entry.locksRunUp && entry.half === undefined;
 }
 
-function problemsFor(truck: TruckParts, entry: CheckEntry, words: SheetText): Problem[] {
+function problemsFor(
+  truck: TruckParts,
+  entry: CheckEntry,
+  words: SheetText,
+  facts: TextFacts,
+): Problem[] {
   const wordsOf = wordsFor(words, entry.key).problems;
   const own = entry.problems
     .filter(({ when }) => when === undefined || when(truck))
@@ -108,7 +116,7 @@ function problemsFor(truck: TruckParts, entry: CheckEntry, words: SheetText): Pr
       const fromAfar = hands && !isRoadSafety(entry) && problem.part === undefined;
       return {
         key: problem.key,
-        label,
+        label: said(label, facts),
         colour: problem.colour,
         lowest: problem.colour,
         limit: problem.colour === "yellow" ? limitFor(truck, problem.limit) : null,
@@ -152,6 +160,24 @@ function said<T>(line: T | ((facts: TextFacts) => T), facts: TextFacts): T {
   return typeof line === "function" ? (line as (facts: TextFacts) => T)(facts) : line;
 }
 
+/** What a line may say when it is about no number. */
+function plainFacts(truck: TruckParts): TextFacts {
+  return {
+    count: 1,
+    nth: null,
+    type: null,
+    low: null,
+    high: null,
+    setPoint: null,
+    stop: null,
+    ceiling: null,
+    unit: "",
+    winter: truck.yard.winter ?? false,
+    towed: truck.kind === "towed",
+    has: (kind) => truck.has(kind),
+  };
+}
+
 /** One check, or one for each fitting; none where the truck gives no cause for it. */
 function checksOf(station: StationKey, entry: CheckEntry, truck: TruckParts, text: SheetText) {
   if (entry.when && !entry.when(truck)) return [];
@@ -169,6 +195,7 @@ function checksOf(station: StationKey, entry: CheckEntry, truck: TruckParts, tex
         ? null
         : Math.round(fromSi(si, reading.unit) * 100) / 100;
     const facts: TextFacts = {
+      ...plainFacts(truck),
       count: expected ?? fitting?.attributes.count ?? 1,
       nth: fittings.length > 1 ? index + 1 : null,
       type: fitting?.attributes.type ?? null,
@@ -176,9 +203,8 @@ function checksOf(station: StationKey, entry: CheckEntry, truck: TruckParts, tex
       high: inUnit(reading?.high),
       setPoint: inUnit(reading?.setPoint),
       stop: inUnit(reading?.stop),
+      ceiling: inUnit(reading?.ceiling),
       unit: reading?.unit ?? "",
-      winter: truck.yard.winter ?? false,
-      towed: truck.kind === "towed",
     };
     const caution = typeof entry.caution === "function" ? entry.caution(truck) : entry.caution;
     return [
@@ -193,7 +219,7 @@ function checksOf(station: StationKey, entry: CheckEntry, truck: TruckParts, tex
         label: said(words.label, facts),
         good: said(words.good, facts),
         caution: caution ?? null,
-        problems: problemsFor(truck, entry, text),
+        problems: problemsFor(truck, entry, text, facts),
         reading,
         drain: entry.drain ?? null,
         expected,
@@ -294,18 +320,7 @@ export function makeSheet(input: SheetInput): Sheet {
     const checks = key === "run-up" ? timed : reordered(timed, order);
     if (checks.length === 0) return [];
     const words = text.stations[key];
-    const engine = said(words.engine, {
-      count: 1,
-      nth: null,
-      type: null,
-      low: null,
-      high: null,
-      setPoint: null,
-      stop: null,
-      unit: "",
-      winter: yard.winter ?? false,
-      towed: kind === "towed",
-    });
+    const engine = said(words.engine, plainFacts(truck));
     return [{ key, label: words.label, engine, caution: STATION_CAUTIONS[key] ?? null, checks }];
   });
 

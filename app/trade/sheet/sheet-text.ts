@@ -1,3 +1,4 @@
+import type { FittingKind } from "../fittings";
 import type { StationKey } from "./check";
 
 /** What a line of text may say about the truck it is for. Numbers are in `unit`. */
@@ -12,9 +13,12 @@ export interface TextFacts {
   high: number | null;
   setPoint: number | null;
   stop: number | null;
+  /** The deepest vacuum the yard's air gives. */
+  ceiling: number | null;
   unit: string;
   winter: boolean;
   towed: boolean;
+  has(kind: FittingKind): boolean;
 }
 
 type Line = string | ((facts: TextFacts) => string);
@@ -23,7 +27,7 @@ export interface CheckText {
   label: Line;
   /** One line: what good looks like. */
   good: Line;
-  problems: Readonly<Record<string, string>>;
+  problems: Readonly<Record<string, Line>>;
   steps?: readonly string[] | ((facts: TextFacts) => readonly string[]);
 }
 

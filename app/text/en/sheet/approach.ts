@@ -13,7 +13,7 @@ export const approach = {
     },
   },
   "approach.leaks": {
-    label: "Ground under the truck",
+    label: "Ground underneath",
     good: "Dry; nothing fresh since it was parked",
     problems: {
       fuel: "fuel on the ground",
@@ -48,7 +48,10 @@ export const approach = {
   },
   "approach.load-aboard": {
     label: "Load aboard",
-    good: "Read it off the glasses. Empty is 0; loaded, the run-up waits until first empty",
+    good: ({ has }) =>
+      has("pump")
+        ? "Read it off the glasses. Empty is 0; loaded, the run-up waits until first empty"
+        : "Read it off the glasses. Empty is 0",
     problems: { "load-unknown": "nobody can say what is in it" },
   },
   "approach.wrong-today": {

@@ -26,15 +26,6 @@ export const cab = {
       worn: "gear worn",
     },
   },
-  "cab.seat-belt": {
-    label: "Seat and belt",
-    good: "Latches, pulls back, no cut; seat locks",
-    problems: {
-      "does-not-latch": "belt does not latch",
-      cut: "belt cut or frayed",
-      "seat-loose": "seat does not lock",
-    },
-  },
   "cab.wipers": {
     label: "Windshield, wipers, washer",
     good: "Glass clear and whole, both wipers wipe clean, washer sprays",
@@ -47,29 +38,32 @@ export const cab = {
     },
   },
   "cab.mirrors": {
-    label: "Mirrors",
-    good: "Whole, clean, set for you, and stay set",
+    label: "Mirrors, seat and belt",
+    good: "Mirrors whole and set for you; seat locks, belt latches and has no cut",
     problems: {
-      missing: "missing",
-      cracked: "cracked",
-      "will-not-stay": "will not stay set",
+      missing: "mirror missing",
+      cracked: "mirror cracked",
+      "will-not-stay": "mirror will not stay set",
+      "belt-does-not-latch": "belt does not latch",
+      "belt-cut": "belt cut or frayed",
+      "seat-loose": "seat does not lock",
     },
   },
-  "cab.warning-lamps": {
-    label: "Warning lamps and air",
-    good: "All lamps prove, then go out; air builds to the governor's cut-out",
+  "cab.horn": {
+    label: ({ has }) => (has("air-brakes") ? "Horn, warning lamps, air" : "Horn, warning lamps"),
+    good: ({ has }) =>
+      has("air-brakes")
+        ? "Horn loud; lamps prove, then go out; air builds to the governor's cut-out"
+        : "Horn loud; lamps prove, then go out",
     problems: {
+      silent: "horn silent",
+      weak: "horn weak",
       "brake-lamp-on": "brake or ABS lamp stays on",
       "air-slow": "air builds slowly or not at all",
       "engine-stop-lamp": "engine stop lamp on",
       "engine-lamp": "engine lamp stays on",
-      "lamp-dead": "a lamp does not prove",
+      "lamp-dead": "a warning lamp does not prove",
     },
-  },
-  "cab.horn": {
-    label: "Horn",
-    good: "Sounds loud",
-    problems: { silent: "silent", weak: "weak" },
   },
   "cab.parking-brake": {
     label: "Parking brake",

@@ -12,19 +12,13 @@ export const hood = {
     },
   },
   "hood.coolant": {
-    label: "Coolant",
-    good: "Between the marks in the sight tank; cap on. Never open it hot",
+    label: "Coolant, belts, hoses",
+    good: "Between the marks, cap on (never open it hot); belts tight, hoses dry, no bare wire",
     problems: {
-      low: "below the low mark",
-      empty: "none to be seen",
+      low: "coolant below the low mark",
+      empty: "no coolant to be seen",
       "oil-in-it": "oil in the coolant",
-      over: "over the full mark",
-    },
-  },
-  "hood.belts-hoses": {
-    label: "Belts, hoses, wires",
-    good: "Belts whole and tight, hoses firm and dry, no bare wire",
-    problems: {
+      over: "coolant over the full mark",
       "belt-gone": "belt broken or off",
       "belt-frayed": "belt frayed or slack",
       "hose-soft": "hose soft, swollen or weeping",

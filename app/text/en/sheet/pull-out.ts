@@ -3,7 +3,7 @@ import type { CheckText } from "../../../trade/sheet/sheet-text";
 export const pullOut = {
   "pull-out.shut": {
     label: "Shut and stowed",
-    good: "Drains and valves shut, caps on, doors shut, chocks up, nothing left out",
+    good: "Drains and valves shut, caps on, doors shut; chocks up to leave, in place to park",
     problems: {
       "will-not-shut": "door, box or drain will not shut",
       loose: "something not held",

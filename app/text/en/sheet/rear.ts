@@ -96,16 +96,21 @@ export const rear = {
   },
   "rear.washed-out": {
     label: "Tank washed out",
-    good: "Empty and washed; shutoff shut when it should; no leak when loaded",
+    good: ({ has }) =>
+      has("primary-shutoff")
+        ? "Empty and washed; the shutoff shut when it should; no leak while loaded"
+        : "Empty and washed; no leak while loaded",
     problems: {
       "tank-leaks": "tank leaked while loaded",
       "solids-left": "solids left that will not wash out",
       "shutoff-trips-early": "shutoff trips before the tank is full",
       "not-washed": "not washed",
     },
-    steps: [
+    steps: ({ has }) => [
       "Wash from the outside. Nobody puts a head in an opening without a permit.",
-      "Rinse the trap with its drain open: plenty should come out.",
+      ...(has("secondary-trap")
+        ? ["Rinse the trap with its drain open: plenty should come out."]
+        : []),
     ],
   },
   "rear.glasses-out": {

@@ -7,7 +7,15 @@ function band({ low, high, unit }: TextFacts): string {
   return "";
 }
 
-const shutDown = "Valve to neutral, PTO out.";
+/** Where the yard's air cannot give the set point, the number to read is the pump's own best. */
+function opens(facts: TextFacts): string {
+  const { setPoint, stop, ceiling, unit } = facts;
+  const at = band(facts) || `${setPoint} ${unit}`;
+  if (setPoint !== null && ceiling !== null && setPoint > ceiling) {
+    return `Set to ${at}; the air here gives ${ceiling}. Read the pump's best. Stop at ${stop} ${unit}`;
+  }
+  return `Opens at ${at}. Stop at ${stop} ${unit}`;
+}
 
 export const runUp = {
   "run-up.pto-in": {
@@ -46,8 +54,7 @@ export const runUp = {
   },
   "run-up.vacuum": {
     label: "Vacuum relief: gauge when steady",
-    good: (facts) =>
-      `Opens at ${band(facts) || "its set point"}. Stop at ${facts.stop} ${facts.unit}`,
+    good: (facts) => opens(facts),
     problems: {
       "did-not-open": "at the stop and did not open",
       "opens-high": "opens above its band",
@@ -60,7 +67,7 @@ export const runUp = {
     steps: [
       "Valve slowly to vacuum. Watch the gauge, not the clock.",
       "When it is steady, read it. Did you hear the relief open? If not, it is the pump's end vacuum.",
-      `At the stop value with no relief: ${shutDown}`,
+      "At the stop value with no relief: valve to neutral, PTO out.",
       "Not over a minute at relief: the pump gets hot.",
       "Lids may be snugged now, under vacuum: guard on, people clear, lock off first.",
     ],
@@ -72,8 +79,7 @@ export const runUp = {
   },
   "run-up.pressure": {
     label: "Pressure relief: gauge when steady",
-    good: (facts) =>
-      `Opens at ${band(facts) || "its set point"}. Stop at ${facts.stop} ${facts.unit}`,
+    good: (facts) => opens(facts),
     problems: {
       "did-not-open": "at the stop and did not open",
       "opens-high": "opens above its band",
@@ -86,7 +92,7 @@ export const runUp = {
     steps: [
       "Valve slowly to pressure. Nobody at the rear; no clamp is touched.",
       "When it is steady, read it. Did you hear the relief open?",
-      `At the stop value with no relief: ${shutDown}`,
+      "At the stop value with no relief: valve to neutral, PTO out.",
       "Not over a minute at relief. Then neutral, and bleed to zero.",
     ],
   },

@@ -13,7 +13,7 @@ const liningSteps = [
   "Clamps back on the barb, not past it.",
 ] as const;
 
-const lining_good = "Lining smooth and tight all the way; clamps sound";
+const liningGood = "Lining smooth and tight all the way; clamps sound";
 
 export const shop = {
   "shop.primary-ball": {
@@ -68,19 +68,22 @@ export const shop = {
   },
   "shop.hose-separator": {
     label: "Air hose, pump to oil separator, inside",
-    good: lining_good,
+    good: liningGood,
     problems: lining,
     steps: liningSteps,
   },
   "shop.hose-pump-inlet": {
-    label: "Air hose, pump inlet to pre-filter, inside",
-    good: lining_good,
+    label: ({ has }) =>
+      has("pre-filter")
+        ? "Air hose, pump inlet to pre-filter, inside"
+        : "Air hose, pump inlet to trap, inside",
+    good: liningGood,
     problems: lining,
     steps: liningSteps,
   },
   "shop.hose-trap": {
     label: "Air hose, pre-filter to trap, inside",
-    good: lining_good,
+    good: liningGood,
     problems: lining,
     steps: liningSteps,
   },

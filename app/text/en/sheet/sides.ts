@@ -16,7 +16,8 @@ const tires = {
 } as const;
 
 const lampProblems = {
-  "head-or-turn": "headlamp or turn signal out",
+  head: "headlamp out",
+  turn: "turn signal out",
   marker: "marker lamp out",
   lens: "lens broken",
   reflector: "reflector missing",
@@ -48,7 +49,7 @@ const stowage = {
 export const sides = {
   "curb-side.tires": tires,
   "curb-side.lamps": {
-    label: "Lamps, front and curb side",
+    label: ({ towed }) => (towed ? "Lamps, curb side" : "Lamps, front and curb side"),
     good: ({ towed }) =>
       towed
         ? "Markers, turn signal and reflectors clean and lit"

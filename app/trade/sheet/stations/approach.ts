@@ -25,11 +25,15 @@ export const approach: readonly CheckEntry[] = [
     kind: "look",
     walks: ["before", "takeover"],
     problems: [
-      red("fuel"),
-      red("brake-fluid", { part: "service-brakes", atTheTruck: "brakes" }),
+      red("fuel", { when: powered }),
+      red("brake-fluid", {
+        part: "service-brakes",
+        atTheTruck: "brakes",
+        when: (truck) => truck.has("hydraulic-brakes"),
+      }),
       red("load"),
       red("oil-runs"),
-      yellow("coolant"),
+      yellow("coolant", { when: powered }),
       white("oil-drips"),
     ],
     // Snow or a wet yard hides the ground; the parts themselves are looked at further on.

@@ -37,12 +37,6 @@ export const cab: readonly CheckEntry[] = [
     ],
   },
   {
-    key: "cab.seat-belt",
-    kind: "look",
-    roadSafety: true,
-    problems: [red("does-not-latch"), red("cut"), yellow("seat-loose")],
-  },
-  {
     key: "cab.wipers",
     kind: "look",
     part: "wipers",
@@ -64,18 +58,9 @@ export const cab: readonly CheckEntry[] = [
       red("missing"),
       red("cracked", { atTheTruck: "cracked-glass" }),
       yellow("will-not-stay"),
-    ],
-  },
-  {
-    key: "cab.warning-lamps",
-    kind: "look",
-    roadSafety: true,
-    problems: [
-      red("brake-lamp-on", { part: "service-brakes", atTheTruck: "brakes" }),
-      red("air-slow", { part: "service-brakes", atTheTruck: "brakes", when: airBrakes }),
-      red("engine-stop-lamp"),
-      yellow("engine-lamp"),
-      yellow("lamp-dead"),
+      red("belt-does-not-latch"),
+      red("belt-cut"),
+      yellow("seat-loose"),
     ],
   },
   {
@@ -83,7 +68,15 @@ export const cab: readonly CheckEntry[] = [
     kind: "look",
     part: "horn",
     walks: ["before", "takeover"],
-    problems: [red("silent"), yellow("weak")],
+    problems: [
+      red("silent"),
+      yellow("weak"),
+      red("brake-lamp-on", { part: "service-brakes", atTheTruck: "brakes" }),
+      red("air-slow", { part: "service-brakes", atTheTruck: "brakes", when: airBrakes }),
+      red("engine-stop-lamp"),
+      yellow("engine-lamp"),
+      yellow("lamp-dead"),
+    ],
   },
   {
     key: "cab.parking-brake",

@@ -11,12 +11,16 @@ export const hood: readonly CheckEntry[] = [
     key: "hood.coolant",
     kind: "level",
     caution: "hot-surfaces",
-    problems: [yellow("low", { driverFix: true }), red("empty"), red("oil-in-it"), white("over")],
-  },
-  {
-    key: "hood.belts-hoses",
-    kind: "look",
-    problems: [red("belt-gone"), yellow("belt-frayed"), yellow("hose-soft"), red("wire-bare")],
+    problems: [
+      yellow("low", { driverFix: true }),
+      red("empty"),
+      red("oil-in-it"),
+      white("over"),
+      red("belt-gone"),
+      yellow("belt-frayed"),
+      yellow("hose-soft"),
+      red("wire-bare"),
+    ],
   },
   {
     key: "hood.steering",

@@ -79,6 +79,7 @@ export const pumpSide: readonly CheckEntry[] = [
       white("oil"),
       ...drainAlways,
     ],
+    couldNotCheck: { colour: "yellow", limit: NO_VACUUM },
     drain: {
       ...drainRules,
       // The trap is there to catch what gets past the primary: a cup of water is a day's work,
@@ -108,6 +109,7 @@ export const pumpSide: readonly CheckEntry[] = [
       yellow("oil-much", { limit: NO_VACUUM }),
       ...drainAlways,
     ],
+    couldNotCheck: { colour: "yellow", limit: NO_VACUUM },
     drain: {
       ...drainRules,
       // It lies behind the pump: load in it has been through the pump, whatever the amount.

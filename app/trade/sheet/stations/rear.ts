@@ -1,7 +1,6 @@
 import {
   type CheckEntry,
   fillShare,
-  hoseLeft,
   NO_PRESSURE,
   NO_TOWING,
   NO_VACUUM,
@@ -57,7 +56,7 @@ export const rear: readonly CheckEntry[] = [
     key: "rear.valves",
     kind: "look",
     from: ["valve"],
-    caution: "stored-pressure",
+    caution: "hoses-under-pressure",
     walks: ["before", "after"],
     problems: [
       red("leaks"),
@@ -77,7 +76,7 @@ export const rear: readonly CheckEntry[] = [
     problems: [
       red("missing", { driverFix: true }),
       red("will-not-lock"),
-      yellow("gasket-weeps", { limit: hoseLeft, driverFix: true }),
+      yellow("gasket-weeps", { limit: NO_PRESSURE, driverFix: true }),
       white("ear-bent"),
     ],
   },

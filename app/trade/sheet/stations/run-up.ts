@@ -36,7 +36,7 @@ export const runUp: readonly CheckEntry[] = [
     half: "vacuum",
     from: ["pump"],
     when: runsVacuum,
-    caution: "at-the-controls",
+    caution: "ears",
     problems: [red("noise"), red("shakes"), yellow("will-not-engage", { limit: NO_VACUUM })],
     couldNotCheck: notRun,
   },

@@ -88,6 +88,7 @@ export const shop: readonly CheckEntry[] = [
     key: "shop.hose-trap",
     kind: "look",
     from: ["secondary-trap"],
+    when: (truck) => truck.has("pre-filter"),
     caution: "stored-vacuum",
     problems: lining,
   },

@@ -6,6 +6,8 @@ const hasHose = (truck: TruckParts) => truck.has("hose");
 
 /** Engine on, lights on: what both sides of a truck have. */
 function side(station: "curb-side" | "driver-side"): CheckEntry[] {
+  // The way from the cab to the curb side leads round the front.
+  const front = (truck: TruckParts) => station === "curb-side" && truck.kind === "powered";
   return [
     {
       key: `${station}.tires`,
@@ -29,7 +31,8 @@ function side(station: "curb-side" | "driver-side"): CheckEntry[] {
       part: "lighting",
       walks: ["before", "takeover"],
       problems: [
-        red("head-or-turn", { driverFix: true }),
+        red("head", { driverFix: true, when: front }),
+        red("turn", { driverFix: true }),
         yellow("marker", { driverFix: true }),
         yellow("lens"),
         yellow("reflector"),
