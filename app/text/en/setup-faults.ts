@@ -30,14 +30,14 @@ export const SETUP_FAULTS: Record<string, string | ((values: FaultValues) => str
   "wrong-unit": ({ unit, units }) => `${unit} does not measure this. Use ${units}.`,
   "out-of-range": ({ low, high, unit }) => `Type a value from ${low} to ${high} ${unit}.`,
   "least-over-most": "The lowest speed is above the highest. Swap or correct them.",
-  "set-point-over-plate": ({ what, value, by }) =>
+  "set-point-over-plate": ({ what, value, by = "" }) =>
     `The ${what} is set at ${value}, over ${whose({ by })} as typed here. Lower the set point first, or correct the plate.`,
   "set-point-under-plate": ({ what, value }) =>
     `The ${what} is set at ${value}, under the lowest speed typed here. Raise the set point first, or correct the plate.`,
 
   "reading-unknown": "Choose a reading from the list.",
   "not-a-positive-number": "Type a number above zero.",
-  "over-limit": ({ by, limit, unit }) =>
+  "over-limit": ({ by = "", limit, unit }) =>
     `Over ${whose({ by })}, ${limit} ${unit}. Type ${limit} ${unit} or less.`,
   "under-plate": ({ limit, unit }) =>
     `Under the lowest speed on the pump's plate, ${limit} ${unit}. Type ${limit} ${unit} or more.`,
@@ -56,7 +56,8 @@ export const SETUP_FAULTS: Record<string, string | ((values: FaultValues) => str
   "date-missing": "Type the date.",
   "passed-in-future": "A test cannot be passed on a day to come. Type today or an earlier day.",
   "due-before-passed": "The last day lies before the day it was passed. Correct one of them.",
-  "due-too-far": ({ latest }) => `The rule allows ${latest} at the latest. Type that or an earlier day.`,
+  "due-too-far": ({ latest }) =>
+    `The rule allows ${latest} at the latest. Type that or an earlier day.`,
   "test-cannot-end": "The law asks for this one: record the next test in its place.",
   "note-long": "200 characters at most.",
 

@@ -1,0 +1,52 @@
+import { v7 as uuidv7 } from "uuid";
+import { z } from "zod";
+import type { Db } from "../../db/client";
+import { errnoOf, FOREIGN_KEY } from "../../db/errors";
+import { inTransaction } from "../../db/retry";
+import { ownChecks } from "../../db/schema/trucks";
+import { type Clock, systemClock } from "../../services/clock";
+import { COLOURS } from "../../trade/limits";
+import { CADENCES, STATIONS } from "../../trade/sheet/check";
+import type { Actor } from "../actor";
+import { writeChanges } from "../feed";
+import { ok, type Result, refuse } from "../refusals";
+import { writeSetupAudit } from "../trucks/setup-audit";
+
+const line = (code: string, most: number) =>
+  z.string({ error: code }).trim().min(1, code).max(most, code);
+
+export const ownCheckSchema = z.object({
+  /** Null: on every truck. */
+  truckId: z.uuid("truck-unknown").nullable().default(null),
+  station: z.enum(STATIONS, { error: "station-unknown" }),
+  cadence: z.enum(CADENCES, { error: "cadence-unknown" }),
+  label: line("own-check-label", 80),
+  good: line("own-check-good", 160),
+  colour: z.enum(COLOURS, { error: "colour-unknown" }),
+});
+export type OwnCheckInput = z.infer<typeof ownCheckSchema>;
+
+/** A check of the carrier's own, from the next walk on: a walk already made stays good. */
+export async function addOwnCheck(
+  db: Db,
+  actor: Actor,
+  input: OwnCheckInput,
+  clock: Clock = systemClock,
+): Promise<Result<{ id: string }>> {
+  const { carrierId, personId } = actor;
+  const id = uuidv7();
+  const now = clock.now();
+  try {
+    await inTransaction(db, async (tx) => {
+      await tx
+        .insert(ownChecks)
+        .values({ ...input, carrierId, id, createdBy: personId, createdAt: now });
+      await writeSetupAudit(tx, actor, now, "own-check.add", id, input);
+      await writeChanges(tx, carrierId, now, [{ kind: "own-check", subjectId: id }]);
+    });
+  } catch (error) {
+    if (errnoOf(error) !== FOREIGN_KEY) throw error;
+    return refuse("invalid", { fields: [{ pointer: "/truckId", code: "truck-unknown" }] });
+  }
+  return ok({ id });
+}
