@@ -1,7 +1,6 @@
 import { createContext, type RouterContextProvider } from "react-router";
 import { config } from "./config";
-import { type Database, openDatabase } from "./db/client";
-import type { Db } from "./db/client";
+import { type Database, type Db, openDatabase } from "./db/client";
 import type { Actor } from "./domain/actor";
 
 /** Who is at the other end of this request, as far as the wire tells. */
@@ -17,8 +16,17 @@ export interface SignedIn {
   carrierName: string;
 }
 
-export const clientContext = createContext<Client>();
-export const databaseContext = createContext<Db>();
+/** What this request asked for: where to come back to, and whether a program or a person reads the answer. */
+export interface Asked {
+  path: string;
+  api: boolean;
+}
+
+/** Set by tests. A running server leaves it empty and opens its one database on first use. */
+export const databaseContext = createContext<Database | null>(null);
+/** Set by the outer server; the stock one tells nothing. */
+export const clientContext = createContext<Client>({ address: "", requestId: "" });
+export const askedContext = createContext<Asked>({ path: "/", api: false });
 export const signedInContext = createContext<SignedIn | null>(null);
 
 let opened: Database | null = null;
@@ -34,8 +42,12 @@ export async function closeDatabase(): Promise<void> {
   opened = null;
 }
 
+export function databaseOf(context: Readonly<RouterContextProvider>): Database {
+  return context.get(databaseContext) ?? database();
+}
+
 export function dbOf(context: Readonly<RouterContextProvider>): Db {
-  return context.get(databaseContext);
+  return databaseOf(context).db;
 }
 
 export function clientOf(context: Readonly<RouterContextProvider>): Client {

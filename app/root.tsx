@@ -1,6 +1,11 @@
 import "./app.css";
 import type { ReactNode } from "react";
 import { Links, Meta, Outlet, Scripts, ScrollRestoration } from "react-router";
+import type { Route } from "./+types/root";
+import { crossSiteMiddleware } from "./auth/cross-site";
+import { sessionMiddleware } from "./auth/session";
+
+export const middleware: Route.MiddlewareFunction[] = [crossSiteMiddleware, sessionMiddleware];
 
 export function Layout({ children }: { children: ReactNode }) {
   return (

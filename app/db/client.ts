@@ -13,6 +13,8 @@ export interface Database {
   db: Db;
   /** The callback pool, for the rate limiter. */
   pool: Pool;
+  /** The schema's name, which the rate limiter spells out. */
+  name: string;
   close(): Promise<void>;
 }
 
@@ -34,6 +36,7 @@ export function openDatabase(url: string, connectionLimit = 10): Database {
   return {
     db,
     pool,
+    name: decodeURIComponent(new URL(url).pathname.slice(1)),
     close: () => new Promise((resolve) => pool.end(() => resolve())),
   };
 }

@@ -16,6 +16,8 @@ export const carriers = mysqlTable("carriers", {
   id: uuid("id").primaryKey(),
   name: varchar("name", { length: 120 }).notNull(),
   policyVersion: int("policy_version").notNull().default(1),
+  /** Goes up with every change of who may do what, so that two at once cannot remove the last manager. */
+  peopleSeq: int("people_seq").notNull().default(0),
   createdAt: instant("created_at").notNull(),
 });
 

@@ -109,6 +109,7 @@ export const sessions = mysqlTable(
   (t) => [
     foreignKey({ name: "sessions_person", columns: [t.personId], foreignColumns: [people.id] }),
     index("sessions_of_person").on(t.personId),
+    index("sessions_expiry").on(t.expiresAt),
   ],
 );
 
@@ -127,7 +128,10 @@ export const signInCodes = mysqlTable(
     /** Used, replaced by a newer one, or out of tries. */
     endedAt: instant("ended_at"),
   },
-  (t) => [index("sign_in_codes_live").on(t.email, t.browserHash, t.endedAt)],
+  (t) => [
+    index("sign_in_codes_of_browser").on(t.browserHash, t.createdAt),
+    index("sign_in_codes_expiry").on(t.expiresAt),
+  ],
 );
 
 /** Kept by rate-limiter-flexible; keys are HMACs. */
