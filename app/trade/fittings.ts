@@ -58,6 +58,10 @@ export interface FittingAttributes {
   specificationPlate?: boolean;
   /** tank: full-opening rear head. */
   fullOpeningRear?: boolean;
+  /** tank: insulated, lined, or hauling a load that eats its metal: each changes its tests. */
+  insulated?: boolean;
+  lined?: boolean;
+  corrosiveLoad?: boolean;
   /** hose: length aboard, m. */
   lengthM?: number;
 }
