@@ -28,8 +28,15 @@ export interface ChoiceField {
 }
 export interface FlagField {
   as: "flag";
-  name: "specificationPlate" | "fullOpeningRear";
+  name: FlagName;
 }
+/** What is true of a tank or not. */
+export type FlagName =
+  | "specificationPlate"
+  | "fullOpeningRear"
+  | "insulated"
+  | "lined"
+  | "corrosiveLoad";
 export type FittingField = AmountField | CountField | ChoiceField | FlagField;
 
 export type AmountName = {
@@ -81,6 +88,9 @@ const FIELDS: Partial<Record<FittingKind, readonly FittingField[]>> = {
     pressure(),
     flag("specificationPlate"),
     flag("fullOpeningRear"),
+    flag("insulated"),
+    flag("lined"),
+    flag("corrosiveLoad"),
   ],
   pump: [
     choice("type", ["vane", "liquid-ring", "blower"], true),
