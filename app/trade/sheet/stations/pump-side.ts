@@ -226,7 +226,7 @@ export const pumpSide: readonly CheckEntry[] = [
       yellow("black-rubber", { limit: NO_VACUUM }),
       yellow("torn", { limit: NO_VACUUM }),
       yellow("gasket-groove", { limit: NO_VACUUM }),
-      white("dirty", { driverFix: true }),
+      white("dirty"),
     ],
   },
   {

@@ -58,7 +58,7 @@ function side(station: "curb-side" | "driver-side"): CheckEntry[] {
         red("latch", { driverFix: true }),
         yellow("hose-damaged", { limit: hoseLeft, when: hasHose }),
         yellow("hose-short", { limit: hoseLeft, when: hasHose }),
-        white("gasket-dry", { driverFix: true, when: hasHose }),
+        white("gasket-dry", { when: hasHose }),
       ],
     },
   ];
