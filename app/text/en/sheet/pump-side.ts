@@ -49,7 +49,10 @@ const flushProblems = {
 export const pumpSide = {
   "pump-side.at-rest": {
     label: "Pump at rest",
-    good: "PTO out, valve at neutral and moves freely, tank vented, gauge on zero",
+    good: ({ has }) =>
+      has("changeover-valve")
+        ? "PTO out, valve at neutral and moves freely, tank vented, gauge on zero"
+        : "PTO out, tank vented, gauge on zero",
     problems: {
       "pto-will-not-come-out": "PTO will not come out",
       "will-not-vent": "tank will not vent",

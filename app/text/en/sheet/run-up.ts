@@ -20,15 +20,20 @@ function opens(facts: TextFacts): string {
 export const runUp = {
   "run-up.pto-in": {
     label: "Pump started",
-    good: "People clear of rear and outlet, valve at neutral, PTO in: runs smooth",
+    good: ({ has }) =>
+      has("changeover-valve")
+        ? "People clear of rear and outlet, valve at neutral, PTO in: runs smooth"
+        : "People clear of rear and outlet, vent open, PTO in: runs smooth",
     problems: {
       noise: "knocks, grinds or squeals",
       shakes: "shakes",
       "will-not-engage": "PTO will not go in",
     },
-    steps: [
+    steps: ({ has }) => [
       "Look round the truck: nobody behind it, nobody at the outlet.",
-      "Valve at neutral, tank vented. PTO in at idle.",
+      has("changeover-valve")
+        ? "Valve at neutral, tank vented. PTO in at idle."
+        : "Vent open, tank vented. PTO in at idle.",
       "Stay at the controls until it is out again.",
     ],
   },
@@ -64,10 +69,14 @@ export const runUp = {
       "gauge-sticks": "needle sticks or jumps",
       "not-heard": "not heard to open",
     },
-    steps: [
-      "Valve slowly to vacuum. Watch the gauge, not the clock.",
+    steps: ({ has }) => [
+      has("changeover-valve")
+        ? "Valve slowly to vacuum. Watch the gauge, not the clock."
+        : "Shut the vent slowly. Watch the gauge, not the clock.",
       "When it is steady, read it. Did you hear the relief open? If not, it is the pump's end vacuum.",
-      "At the stop value with no relief: valve to neutral, PTO out.",
+      has("changeover-valve")
+        ? "At the stop value with no relief: valve to neutral, PTO out."
+        : "At the stop value with no relief: vent open, PTO out.",
       "Not over a minute at relief: the pump gets hot.",
       "Lids may be snugged now, under vacuum: guard on, people clear, lock off first.",
     ],
@@ -98,7 +107,10 @@ export const runUp = {
   },
   "run-up.pto-out": {
     label: "Pump stopped",
-    good: "Valve at neutral, tank bled to zero, PTO out, pump not too hot to stand by",
+    good: ({ has }) =>
+      has("changeover-valve")
+        ? "Valve at neutral, tank bled to zero, PTO out; no smell or smoke of heat"
+        : "Vent open, tank bled to zero, PTO out; no smell or smoke of heat",
     problems: {
       "will-not-come-out": "PTO will not come out",
       "will-not-bleed": "tank does not bleed to zero",
