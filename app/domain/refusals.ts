@@ -13,6 +13,8 @@ export const REFUSAL_STATUS = {
   "not-from-photos": 403,
   "nothing-to-limit": 409,
   stale: 409,
+  "last-manager": 409,
+  "invitation-ended": 410,
 } as const;
 export type RefusalCode = keyof typeof REFUSAL_STATUS;
 

@@ -5,7 +5,7 @@ import { inTransaction } from "../../db/retry";
 import { signInCodes } from "../../db/schema/people";
 import { minutes } from "../../domain/durations";
 import { queueMail } from "../../domain/mail/queue-mail";
-import { keyedHash } from "../tokens";
+import { keyedHash } from "../../domain/tokens";
 
 export const CODE_LASTS = minutes(10);
 

@@ -3,8 +3,8 @@ import type { Db } from "../../db/client";
 import { inTransaction } from "../../db/retry";
 import { signInCodes } from "../../db/schema/people";
 import { type FaultValues, ok, type Result, refuse } from "../../domain/refusals";
+import { sameHash } from "../../domain/tokens";
 import { type Started, startSession } from "../sessions/start-session";
-import { sameHash } from "../tokens";
 import { codeHash } from "./issue-code";
 import { newestCode, type PendingCode } from "./pending-code";
 

@@ -3,7 +3,7 @@ import type { Pool } from "mysql2";
 import { RateLimiterMySQL, RateLimiterRes } from "rate-limiter-flexible";
 import type { Database } from "../../db/client";
 import { hours } from "../../domain/durations";
-import { keyedHash } from "../tokens";
+import { keyedHash } from "../../domain/tokens";
 
 const HOUR_S = hours(1) / 1000;
 const PER_ADDRESS = 5;

@@ -5,7 +5,7 @@ import { carriers } from "../../db/schema/carriers";
 import { memberships, people, sessions } from "../../db/schema/people";
 import type { Role } from "../../domain/actor";
 import { days, minutes } from "../../domain/durations";
-import { tokenHash } from "../tokens";
+import { tokenHash } from "../../domain/tokens";
 
 const SLIDES_BY = days(90);
 const AT_MOST = days(180);

@@ -3,7 +3,7 @@ import { v7 as uuidv7 } from "uuid";
 import type { Db } from "../../db/client";
 import { memberships, people, sessions } from "../../db/schema/people";
 import type { Role } from "../../domain/actor";
-import { makeToken, tokenHash } from "../tokens";
+import { makeToken, tokenHash } from "../../domain/tokens";
 import { sessionEnd } from "./open-session";
 
 export interface Started {

@@ -1,4 +1,5 @@
 import type { FaultValues, RefusalCode } from "../../domain/refusals";
+import { PEOPLE_FAULTS } from "./people-faults";
 import { SETUP_FAULTS } from "./setup-faults";
 
 const TITLES: Record<RefusalCode, string> = {
@@ -10,10 +11,13 @@ const TITLES: Record<RefusalCode, string> = {
   "not-clear": "The key stays on the peg.",
   "already-ended": "This has already been ended.",
   "own-red-tag": "Whoever raised a red tag does not sign it off. Ask a certifier.",
-  "second-certifier": "The driver was not satisfied with your sign-off. A second certifier must look.",
+  "second-certifier":
+    "The driver was not satisfied with your sign-off. A second certifier must look.",
   "two-people": "Your firm asks for a second person: whoever found it does not sign it off.",
   "not-from-photos": "This one is signed off at the truck, not from photos.",
   "nothing-to-limit": "Only a yellow tag can run under a limit.",
+  "last-manager": "Somebody must stay manager here. Make another person manager first.",
+  "invitation-ended": "This invitation has ended. Ask whoever sent it for a new one.",
   stale: "The truck changed while you were looking. Look again.",
 };
 
@@ -21,6 +25,7 @@ type Words = string | ((values: FaultValues) => string);
 
 const FIELDS: Record<string, Words> = {
   ...SETUP_FAULTS,
+  ...PEOPLE_FAULTS,
   "signature-empty": "Type your name to sign.",
   "reason-empty": "Say why no repair is needed.",
   "run-name-empty": "Name the run.",

@@ -1,0 +1,49 @@
+import { z } from "zod";
+import { ROLES } from "../actor";
+
+/** An e-mail address, lower-cased: one person, however it was typed. */
+export const emailSchema = z
+  .string({ error: "email-form" })
+  .trim()
+  .toLowerCase()
+  .max(254, "email-form")
+  .pipe(z.email({ error: "email-form" }));
+
+export const personNameSchema = z
+  .string({ error: "person-name" })
+  .trim()
+  .min(2, "person-name")
+  .max(80, "person-name");
+
+export const phoneSchema = z
+  .string()
+  .trim()
+  .regex(/^[+()\d .-]{3,32}$/, "phone-form")
+  .nullable();
+
+const place = {
+  roles: z.array(z.enum(ROLES, { error: "roles-empty" })).min(1, "roles-empty"),
+  certifier: z.boolean(),
+  yardId: z.uuid({ error: "yard-unknown" }).nullable(),
+};
+
+/** Dispatchers never sign off (K10): a certifier is something else as well. */
+function certifierHasRole(input: { roles: readonly string[]; certifier: boolean }): boolean {
+  return !input.certifier || input.roles.some((role) => role !== "dispatcher");
+}
+const certifierFault = { path: ["certifier"], error: "certifier-role" };
+
+export const inviteSchema = z
+  .object({ id: z.uuid(), email: emailSchema, name: personNameSchema, ...place })
+  .refine(certifierHasRole, certifierFault);
+export type InviteInput = z.infer<typeof inviteSchema>;
+
+export const membershipSchema = z
+  .object({
+    personId: z.uuid(),
+    ...place,
+    /** Place in the line of those called: 1 is called first; null is never called. */
+    onCall: z.number({ error: "on-call-place" }).int().min(1, "on-call-place").max(99).nullable(),
+  })
+  .refine(certifierHasRole, certifierFault);
+export type MembershipInput = z.infer<typeof membershipSchema>;
