@@ -1,5 +1,5 @@
 /** U.S. Standard Atmosphere 1976 / ICAO, troposphere. */
-export const SEA_LEVEL_PA = 101_325;
+const SEA_LEVEL_PA = 101_325;
 const SEA_LEVEL_K = 288.15;
 const LAPSE_K_PER_M = 0.0065;
 const EXPONENT = 5.255_876;

@@ -91,7 +91,7 @@ export type SetPointVerdict =
   | { ok: false; faults: SetPointFault[] };
 
 /** Rounding of unit conversions must not refuse a value equal to its limit. */
-export function exceeds(value: number, limit: number): boolean {
+function exceeds(value: number, limit: number): boolean {
   return value > limit + 1e-9 * Math.max(1, Math.abs(limit));
 }
 

@@ -21,17 +21,15 @@ interface Unit {
 }
 
 /** What a unit measures. Two units convert only within one group. */
-export const UNIT_GROUPS = [
-  "pressure",
-  "length",
-  "volume",
-  "flow",
-  "temperature",
-  "speed",
-  "time",
-  "hours",
-] as const;
-export type UnitGroup = (typeof UNIT_GROUPS)[number];
+export type UnitGroup =
+  | "pressure"
+  | "length"
+  | "volume"
+  | "flow"
+  | "temperature"
+  | "speed"
+  | "time"
+  | "hours";
 
 const UNITS = {
   Pa: { group: "pressure", factor: 1 },

@@ -3,7 +3,7 @@ import type { Check } from "~/trade/sheet/check";
 import { fromSi } from "~/trade/units";
 
 /** An answer that finds nothing wrong: in the band, at its level, run dry, all counted. */
-export function goodAnswer(check: Check): Answer {
+function goodAnswer(check: Check): Answer {
   const { reading } = check;
   if (reading) {
     const middle =

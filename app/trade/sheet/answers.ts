@@ -41,7 +41,7 @@ const drain = z
     if (!ran && answer.amount !== "none") issue("amount", "nothing-ran");
   });
 
-export const answerSchema = z.discriminatedUnion("kind", [
+const answerSchema = z.discriminatedUnion("kind", [
   /** A look, all good. */
   z.object({ kind: z.literal("look"), ok: z.literal(true) }),
   z.object({ kind: z.literal("problem"), problems: z.array(problem).min(1).max(8) }),

@@ -14,19 +14,17 @@ import type {
 import type { TruckParts } from "./truck-parts";
 
 /** What nobody signs off from photos and no driver puts right (K10). */
-export const CERTIFIER_AT_THE_TRUCK = [
-  "brakes",
-  "steering",
-  "suspension",
-  "wheels",
-  "frame",
-  "coupling",
-  "relief-settings",
-  "cracked-glass",
-  "clamps",
-  "guards",
-] as const;
-export type AtTheTruck = (typeof CERTIFIER_AT_THE_TRUCK)[number];
+export type AtTheTruck =
+  | "brakes"
+  | "steering"
+  | "suspension"
+  | "wheels"
+  | "frame"
+  | "coupling"
+  | "relief-settings"
+  | "cracked-glass"
+  | "clamps"
+  | "guards";
 
 export type LimitOf = Limit | ((truck: TruckParts) => Limit | null);
 

@@ -33,9 +33,9 @@ const PUMP_FLUID: Record<string, { label: string; good: string }> = {
 const pumpFluid = ({ type }: TextFacts) => PUMP_FLUID[type ?? ""] ?? PUMP_OIL;
 
 const flushSteps = [
-  "Pump warm, valve at neutral, tank vented. No flame, no smoking, nothing red-hot near.",
+  "At the end of the day: pump warm, tank vented. No flame, no smoking, nothing hot near.",
   "Let the pump draw the flush in slowly through its port, a little at a time.",
-  "Run it a minute or two; catch what comes out at the oil catch.",
+  "Run it a minute or two; catch what comes out behind the pump.",
   "Look at it: dark is a day's work, milky is water, load means the traps let it through.",
   "Drain, shut, and let it take fresh oil before you stop it.",
 ];
@@ -164,8 +164,8 @@ export const pumpSide = {
     steps: flushSteps,
   },
   "pump-side.flush-by-hand": {
-    label: "Flush the pump by hand",
-    good: "Flushed warm with the maker's flushing oil until it ran clean",
+    label: "Pump flushed by hand this week",
+    good: "At the end of a day, warm, with the maker's flushing oil, until it ran clean",
     problems: flushProblems,
     steps: flushSteps,
   },
