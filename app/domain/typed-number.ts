@@ -12,7 +12,13 @@ function readNumber(typed: unknown): unknown {
 /** A number from a form or from JSON. */
 export const typedNumber = z.preprocess(readNumber, z.number({ error: "not-a-number" }));
 
-/** The same, or nothing. */
+/** The same, or left empty. */
+export const typedNumberOptional = z.preprocess(
+  readNumber,
+  z.number({ error: "not-a-number" }).optional(),
+);
+
+/** The same, or null where nothing was typed. */
 export const typedNumberOrNone = z.preprocess(
   (typed) => readNumber(typed) ?? null,
   z.number({ error: "not-a-number" }).nullable(),

@@ -2,7 +2,7 @@ import { z } from "zod";
 import type { FittingAttributes, FittingKind } from "../../trade/fittings";
 import { fromSi, groupOf, isUnit, toSi, unitsOf } from "../../trade/units";
 import type { FieldFault } from "../refusals";
-import { typedNumber } from "../typed-number";
+import { typedNumberOptional } from "../typed-number";
 import {
   type AmountField,
   type CountField,
@@ -11,7 +11,7 @@ import {
 } from "./fitting-fields";
 
 const amount = z.object({
-  value: typedNumber.optional(),
+  value: typedNumberOptional,
   unit: z.string().max(12).optional(),
 });
 
@@ -19,7 +19,7 @@ const amount = z.object({
 export const typedAttributesSchema = z.object({
   type: z.string().max(40).optional(),
   grade: z.string().max(40).optional(),
-  count: typedNumber.optional(),
+  count: typedNumberOptional,
   specificationPlate: z.boolean().optional(),
   fullOpeningRear: z.boolean().optional(),
   insulated: z.boolean().optional(),

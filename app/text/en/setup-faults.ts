@@ -26,7 +26,8 @@ export const SETUP_FAULTS: Record<string, string | ((values: FaultValues) => str
   "choice-unknown": "Choose one from the list.",
   "not-a-number": "Type a number, such as 18.5.",
   "whole-number": "Type a whole number.",
-  "unknown-unit": ({ units }) => `Choose a unit from the list: ${units}.`,
+  "unknown-unit": ({ units }) =>
+    units ? `Choose a unit from the list: ${units}.` : "Choose a unit from the list.",
   "wrong-unit": ({ unit, units }) => `${unit} does not measure this. Use ${units}.`,
   "out-of-range": ({ low, high, unit }) => `Type a value from ${low} to ${high} ${unit}.`,
   "least-over-most": "The lowest speed is above the highest. Swap or correct them.",
