@@ -1,5 +1,6 @@
 import { sql } from "drizzle-orm";
 import { RouterContextProvider } from "react-router";
+import { type Housekeeping, startHousekeeping } from "./auth/housekeeping";
 import { config } from "./config";
 import { type Client, clientContext, closeDatabase, database } from "./context";
 import { startTicker, type Ticker } from "./domain/gate/ticker";
@@ -9,6 +10,7 @@ import { storage } from "./services/storage";
 
 let ticker: Ticker | null = null;
 let drain: MailDrain | null = null;
+let housekeeping: Housekeeping | null = null;
 
 /** Reads the configuration, opens the database and starts the background work. */
 export async function start(): Promise<void> {
@@ -18,6 +20,7 @@ export async function start(): Promise<void> {
     log().error({ what, error: error instanceof Error ? error.name : "unknown" }, "background");
   ticker = startTicker(db, report("ticker"));
   drain = startMailDrain(db, report("mail"));
+  housekeeping = startHousekeeping(db, report("housekeeping"));
 }
 
 async function works(check: () => Promise<unknown>): Promise<boolean> {
@@ -42,6 +45,7 @@ export async function health(): Promise<{ ok: boolean; checks: Record<string, bo
 export async function stop(): Promise<void> {
   await ticker?.stop();
   await drain?.stop();
+  await housekeeping?.stop();
   await closeDatabase();
 }
 

@@ -4,6 +4,7 @@ import { redeem, sendCode } from "~/auth/authenticator";
 import { newestCode } from "~/auth/codes/pending-code";
 import { whyEnded } from "~/auth/codes/redeem-code";
 import { clientKey, takeSend } from "~/auth/codes/send-limits";
+import { removeEnded } from "~/auth/housekeeping";
 import { safeNext } from "~/auth/next-path";
 import { deviceName } from "~/auth/sessions/device-name";
 import { openSession } from "~/auth/sessions/open-session";
@@ -319,4 +320,20 @@ test("a device is named so that its owner knows it", () => {
   expect(deviceName(chrome)).toBe("Chrome, Android");
   expect(deviceName(safari)).toBe("Safari, iPhone");
   expect(deviceName(null)).toBe("");
+});
+
+test("codes go a day after they ended, sessions a month after, and nothing before", async () => {
+  const { clock, token, email, person } = await signedIn();
+  const browser = new Browser(clock);
+  await browser.ask(email);
+  await removeEnded(testDb(), clock.now());
+  expect(await browser.newest()).toBeDefined();
+  clock.turn(days(1) + minutes(11));
+  await removeEnded(testDb(), clock.now());
+  expect(await browser.newest()).toBeNull();
+  expect(await openSession(testDb(), token, clock.now())).not.toBeNull();
+  clock.turn(days(200));
+  await removeEnded(testDb(), clock.now());
+  const kept = await testDb().select().from(sessions).where(eq(sessions.personId, person.personId));
+  expect(kept).toEqual([]);
 });
