@@ -1,0 +1,58 @@
+import { NavLink, Outlet } from "react-router";
+import { requirePermission } from "~/auth/require-permission";
+import { office } from "~/text/en/office";
+import type { Route } from "./+types/office-layout";
+import { OfficeError } from "./page-parts";
+
+export function loader({ context }: Route.LoaderArgs) {
+  requirePermission(context, "truck.manage");
+  return null;
+}
+
+const PARTS = [
+  { to: "/office", label: office.title, end: true },
+  { to: "/office/trucks", label: office.start.trucks },
+  { to: "/office/yards", label: office.start.yards },
+  { to: "/office/checks", label: office.start.checks },
+  { to: "/office/people", label: office.start.people },
+  { to: "/office/policy", label: office.start.policy },
+];
+
+export default function OfficeLayout() {
+  return (
+    <Frame>
+      <Outlet />
+    </Frame>
+  );
+}
+
+function Frame({ children }: { children: React.ReactNode }) {
+  return (
+    <div className="mx-auto max-w-5xl px-4 pb-16">
+      <nav aria-label={office.sections} className="mb-6 border-b border-line print:hidden">
+        <ul className="flex flex-wrap gap-x-6">
+          {PARTS.map(({ to, label, end }) => (
+            <li key={to}>
+              <NavLink
+                to={to}
+                end={end}
+                className="inline-flex min-h-11 items-center border-b-4 border-transparent no-underline aria-[current=page]:border-enamel aria-[current=page]:font-bold"
+              >
+                {label}
+              </NavLink>
+            </li>
+          ))}
+        </ul>
+      </nav>
+      <main>{children}</main>
+    </div>
+  );
+}
+
+export function ErrorBoundary() {
+  return (
+    <Frame>
+      <OfficeError />
+    </Frame>
+  );
+}

@@ -1,0 +1,15 @@
+import { office, standingWords } from "~/text/en/office";
+import type { StandingWord } from "~/trade/standing/standing";
+
+/** A truck's standing in one word; why it says nothing of walks when it is out of service. */
+export function StandingOf({
+  standing,
+  inService,
+}: {
+  standing: StandingWord | null;
+  inService: boolean;
+}) {
+  if (!inService) return <span className="text-mute">{office.trucks.outOfService}</span>;
+  if (standing === null) return <span className="text-mute">{office.trucks.workingOut}</span>;
+  return <span className="font-bold">{standingWords[standing]}</span>;
+}

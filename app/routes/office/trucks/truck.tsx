@@ -1,0 +1,271 @@
+import { data, redirect } from "react-router";
+import { requirePermission } from "~/auth/require-permission";
+import { dbOf } from "~/context";
+import { type FieldFault, REFUSAL_STATUS } from "~/domain/refusals";
+import { fittingKinds, office, unitKinds, vinWarnings } from "~/text/en/office";
+import { refusalText } from "~/text/en/refusals";
+import { ActionButton } from "../fields";
+import { notFound } from "../office-reply";
+import { ActionLink, Empty, MainLink, PageHead, SavedNote } from "../page-parts";
+import { StandingOf } from "../standing-of";
+import type { Route } from "./+types/truck";
+import { doneNote, runTruckCommand, truckCommandSchema } from "./truck-commands";
+import { truckOr404 } from "./truck-or-404";
+import { type TruckView, truckView } from "./truck-view";
+
+export async function loader({ context, params }: Route.LoaderArgs) {
+  const actor = requirePermission(context, "truck.manage");
+  return truckView(await truckOr404(dbOf(context), actor, params.unit));
+}
+
+export async function action({ context, params, request }: Route.ActionArgs) {
+  const actor = requirePermission(context, "truck.manage");
+  const db = dbOf(context);
+  const { truck } = await truckOr404(db, actor, params.unit);
+  const asked = truckCommandSchema.safeParse(Object.fromEntries(await request.formData()));
+  if (!asked.success) {
+    return data({ faults: [refusalText.title("invalid")] }, { status: 400 });
+  }
+  const done = await runTruckCommand(db, actor, truck.id, asked.data);
+  if (done.ok) {
+    throw redirect(`/office/trucks/${truck.unitNumber}?done=${doneNote(asked.data)}`);
+  }
+  const { code, fields } = done.refusal;
+  if (code === "not-found") notFound("other");
+  const words = ({ code: fault, values }: FieldFault) => refusalText.field(fault, values);
+  const faults = fields ? fields.map(words) : [refusalText.title(code)];
+  return data({ faults }, { status: REFUSAL_STATUS[code] });
+}
+
+export default function Truck({ loaderData, actionData }: Route.ComponentProps) {
+  const { truck, yard } = loaderData;
+  const words = office.truck;
+  const base = `/office/trucks/${truck.unitNumber}`;
+  return (
+    <>
+      <PageHead
+        title={<span className="font-stencil font-normal">{truck.unitNumber}</span>}
+        lead={<StandingOf standing={truck.standing} inService={truck.inService} />}
+      >
+        <MainLink to={`${base}/sheet`}>{words.sheet}</MainLink>
+      </PageHead>
+      <SavedNote />
+      {actionData?.faults.map((fault) => (
+        <p key={fault} role="alert" className="mb-6 border-l-4 border-red bg-card p-3">
+          {fault}
+        </p>
+      ))}
+      {truck.gateFault && (
+        <p role="alert" className="mb-6 border-l-4 border-red bg-card p-3">
+          {words.gateFault}
+        </p>
+      )}
+      <dl className="mb-4 grid grid-cols-[8rem_1fr] gap-y-2">
+        <dt className="text-mute">{office.trucks.kind}</dt>
+        <dd>{unitKinds[truck.kind]}</dd>
+        <dt className="text-mute">{office.trucks.yard}</dt>
+        <dd>{yard.name}</dd>
+        <dt className="text-mute">{office.trucks.vin}</dt>
+        <dd>
+          {truck.vin ?? words.noVin}
+          {truck.vinWarning && <p className="text-mute">{vinWarnings[truck.vinWarning]}</p>}
+        </dd>
+      </dl>
+      <p className="mb-10 flex flex-wrap gap-3">
+        <ActionLink to={`${base}/details`}>{words.changeDetails}</ActionLink>
+        <ActionLink to={`${base}/move`}>{words.move}</ActionLink>
+      </p>
+      <Fittings base={base} view={loaderData} />
+      <SetPoints base={base} view={loaderData} />
+      <Tests base={base} view={loaderData} />
+      <Section id="service" title={truck.inService ? words.inService : words.outOfService}>
+        <p className="mb-3 max-w-prose text-mute">{words.serviceNote}</p>
+        <ActionButton name={truck.inService ? "out-of-service" : "in-service"}>
+          {truck.inService ? words.takeOut : words.putBack}
+        </ActionButton>
+      </Section>
+    </>
+  );
+}
+
+function Section(props: {
+  id: string;
+  title: string;
+  what?: string;
+  action?: React.ReactNode;
+  children: React.ReactNode;
+}) {
+  const { id, title, what, action, children } = props;
+  return (
+    <section aria-labelledby={id} className="mb-12">
+      <div className="mb-3 flex flex-wrap items-end justify-between gap-3">
+        <div>
+          <h2 id={id} className="text-2xl font-bold">
+            {title}
+          </h2>
+          {what && <p className="max-w-prose text-mute">{what}</p>}
+        </div>
+        {action}
+      </div>
+      {children}
+    </section>
+  );
+}
+
+const ROWS = "divide-y divide-line border-y border-line";
+const ROW = "grid gap-x-6 gap-y-1 py-3 sm:grid-cols-[14rem_1fr_auto] sm:items-center";
+
+function Fittings({ base, view: { fittings, removed } }: { base: string; view: TruckView }) {
+  const words = office.truck;
+  return (
+    <Section
+      id="fittings"
+      title={words.fittings}
+      what={`${words.fittingsWhat} ${words.endsWalks}`}
+      action={<ActionLink to={`${base}/fittings/new`}>{words.addFitting}</ActionLink>}
+    >
+      {fittings.length === 0 && <Empty>{words.noFittings}</Empty>}
+      {fittings.length > 0 && (
+        <ul className={ROWS}>
+          {fittings.map(({ id, kind, line }) => (
+            <li key={id} className={ROW}>
+              <span className="font-bold">{fittingKinds[kind]}</span>
+              <span>{line}</span>
+              <span className="flex gap-3">
+                <ActionLink
+                  to={`${base}/fittings/${id}`}
+                  label={words.changeOf(fittingKinds[kind])}
+                >
+                  {words.change}
+                </ActionLink>
+                <ActionButton
+                  name="remove-fitting"
+                  fields={{ fittingId: id }}
+                  label={words.takeOffOf(fittingKinds[kind])}
+                >
+                  {words.takeOff}
+                </ActionButton>
+              </span>
+            </li>
+          ))}
+        </ul>
+      )}
+      {removed.length > 0 && (
+        <>
+          <h3 className="mt-6 mb-2 text-xl font-bold">{words.takenOff}</h3>
+          <ul className={ROWS}>
+            {removed.map(({ id, kind, line, on }) => (
+              <li key={id} className={ROW}>
+                <span>{fittingKinds[kind]}</span>
+                <span className="text-mute">
+                  {[line, words.takenOffOn(on)].filter(Boolean).join(", ")}
+                </span>
+                <ActionButton
+                  name="restore-fitting"
+                  fields={{ fittingId: id }}
+                  label={words.putBackOf(fittingKinds[kind])}
+                >
+                  {words.putBackFitting}
+                </ActionButton>
+              </li>
+            ))}
+          </ul>
+        </>
+      )}
+    </Section>
+  );
+}
+
+function SetPoints({ base, view: { setPoints } }: { base: string; view: TruckView }) {
+  const words = office.truck;
+  return (
+    <Section id="set-points" title={words.setPoints} what={words.setPointsWhat}>
+      <ul className={ROWS}>
+        {setPoints.map((line) => (
+          <li key={line.reading} className={ROW}>
+            <span className="font-bold">{line.label}</span>
+            <span>
+              {line.value ?? words.notSet}
+              {line.rest && <span className="text-mute"> {line.rest}</span>}
+              {line.owed && <p className="font-bold text-blue">{words.owed}</p>}
+              {line.unreachable && <p className="font-bold">{line.unreachable}</p>}
+            </span>
+            <span className="flex gap-3">
+              <ActionLink to={`${base}/set-points/${line.reading}`} label={words.setOf(line.label)}>
+                {line.set ? words.change : words.setIt}
+              </ActionLink>
+              {line.set && (
+                <ActionButton
+                  name="remove-set-point"
+                  fields={{ reading: line.reading }}
+                  label={words.clearOf(line.label)}
+                >
+                  {words.clear}
+                </ActionButton>
+              )}
+            </span>
+          </li>
+        ))}
+      </ul>
+    </Section>
+  );
+}
+
+function Tests({ base, view: { tests, testsLeftOver } }: { base: string; view: TruckView }) {
+  const words = office.truck;
+  return (
+    <Section id="tests" title={words.tests} what={words.testsWhat}>
+      <ul className={ROWS}>
+        {tests.map((line) => (
+          <li key={line.test} className={ROW}>
+            <span>
+              <span className="font-bold">{line.label}</span>
+              <span className="block text-mute">{line.rule}</span>
+            </span>
+            <span>
+              <span className={line.state === "past" ? "font-bold text-red" : "font-bold"}>
+                {words.testStates[line.state]}
+              </span>{" "}
+              {line.dates}
+              {line.note && <span className="block text-mute">{line.note}</span>}
+            </span>
+            <span className="flex gap-3">
+              <ActionLink to={`${base}/tests/${line.test}`} label={words.recordOf(line.label)}>
+                {words.record}
+              </ActionLink>
+              {line.mayEnd && (
+                <ActionButton
+                  name="end-test"
+                  fields={{ kind: line.test }}
+                  label={words.endOf(line.label)}
+                >
+                  {words.end}
+                </ActionButton>
+              )}
+            </span>
+          </li>
+        ))}
+        {testsLeftOver.map((line) => (
+          <li key={line.kind} className={ROW}>
+            <span className="font-bold">{line.label}</span>
+            <span>
+              {line.dates}
+              <span className="block text-mute">{words.leftOver}</span>
+            </span>
+            <ActionButton
+              name="end-test"
+              fields={{ kind: line.kind }}
+              label={words.endOf(line.label)}
+            >
+              {words.end}
+            </ActionButton>
+          </li>
+        ))}
+      </ul>
+    </Section>
+  );
+}
+
+export const meta: Route.MetaFunction = ({ params }) => [
+  { title: `${params.unit} · ${office.product}` },
+];
