@@ -285,7 +285,7 @@ async function onCallLine(actor: Actor, clock: TestClock): Promise<string[]> {
 test("the on-call line has no gaps and no two in one place", async () => {
   const { manager, carrier, clock } = await makeFirm();
   const names = ["Ada", "Bo", "Cy"];
-  const crew = [];
+  const crew: Actor[] = [];
   for (const name of names) crew.push(await makePerson(testDb(), carrier, ["mechanic"], { name }));
   const put = (index: number, onCall: number | null) =>
     changeMembership(
