@@ -1,6 +1,6 @@
 import type { ReactNode } from "react";
 import { isRouteErrorResponse, Link, useRouteError, useSearchParams } from "react-router";
-import { isSavedNote, office, savedNotes } from "~/text/en/office";
+import { isSavedNote, type SavedNote as Note, office, savedNotes } from "~/text/en/office";
 
 export function PageHead({
   title,
@@ -23,14 +23,18 @@ export function PageHead({
 }
 
 /** What the last change did, from the word it left in the address. */
-export function SavedNote() {
+export function SavedNote({ undo }: { undo?: (done: Note) => ReactNode }) {
   const [search] = useSearchParams();
   const word = search.get("done");
   if (!isSavedNote(word)) return null;
   return (
-    <p role="status" className="mb-6 border-l-4 border-green bg-card p-3 print:hidden">
-      {savedNotes[word]}
-    </p>
+    <div
+      role="status"
+      className="mb-6 flex flex-wrap items-center justify-between gap-3 border-l-4 border-green bg-card p-3 print:hidden"
+    >
+      <p>{savedNotes[word]}</p>
+      {undo?.(word)}
+    </div>
   );
 }
 

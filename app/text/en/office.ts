@@ -263,7 +263,7 @@ export const savedNotes = {
   truck: "The truck is entered. Compare each fitting with its plate, then enter the set points.",
   details: "Saved.",
   fitting: "Saved. Walks made before no longer count: the driver walks the truck again.",
-  removed: "Taken off. It is under “Taken off” below, and can be put back.",
+  removed: "Taken off. Walks made before no longer count. It can be put back.",
   restored: "Put back. Walks made before no longer count: the driver walks the truck again.",
   "set-point": "Saved. Walks made before no longer count: the driver walks the truck again.",
   moved: "Moved. Walks made before no longer count: the driver walks the truck again.",
@@ -274,6 +274,13 @@ export const savedNotes = {
   check: "Added. It is on the sheets from the next walk on.",
   "check-removed": "Taken off the sheets. It is under “Taken off” below, and can be put back.",
   "check-restored": "Back on the sheets from the next walk on.",
+  invited: "The invitation is on its way.",
+  "invitation-revoked": "The invitation is taken back. Its link no longer works.",
+  person: "Saved. It holds from their next step on.",
+  deactivated: "Deactivated, and signed out everywhere.",
+  reactivated: "Reactivated. They sign in with a code.",
+  "sessions-ended": "Signed out everywhere.",
+  policy: "Saved. Every truck's standing was worked out again.",
 } as const;
 export type SavedNote = keyof typeof savedNotes;
 export function isSavedNote(word: string | null): word is SavedNote {

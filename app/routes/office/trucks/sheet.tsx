@@ -134,7 +134,7 @@ function Problems({ line }: { line: ProblemLine }) {
   return (
     <li className="flex items-baseline gap-3">
       <span
-        className={`w-16 shrink-0 border px-2 text-center text-base font-bold print:bg-white print:text-black ${TAG[line.colour]}`}
+        className={`w-20 shrink-0 border px-2 text-center text-base font-bold print:bg-white print:text-black ${TAG[line.colour]}`}
       >
         {line.word}
       </span>

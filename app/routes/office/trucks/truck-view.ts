@@ -1,7 +1,17 @@
 import { figures } from "~/domain/trucks/fitting-attributes";
+import { fittingFields } from "~/domain/trucks/fitting-fields";
 import type { SetPointLine, TestLine, TruckSetup } from "~/domain/trucks/truck-setup";
-import { dayLabel, limitedBy, office, readings, testLabel, withUnit } from "~/text/en/office";
+import {
+  dayLabel,
+  fittingGroups,
+  limitedBy,
+  office,
+  readings,
+  testLabel,
+  withUnit,
+} from "~/text/en/office";
 import { greatestVacuum } from "~/trade/atmosphere";
+import type { Fitting } from "~/trade/fittings";
 import { fromSi } from "~/trade/units";
 import { plateLine } from "./shown-plate";
 
@@ -30,7 +40,7 @@ function setPointView({ reading, set, limit }: SetPointLine, yard: TruckSetup["y
       .join(", "),
     unreachable:
       reading === "vacuum-relief" && set.setPointSi > most
-        ? words.unreachable(withUnit(figures(fromSi(most, unit)), unit), yard.name)
+        ? words.unreachable(airLimit(most, unit), yard.name)
         : null,
   };
 }
@@ -55,16 +65,25 @@ function testView({ required, recorded, state }: TestLine) {
   };
 }
 
+function fittingView(fitting: Fitting) {
+  const { id, kind } = fitting;
+  return { id, kind, line: plateLine(fitting), hasPlate: fittingFields(kind).length > 0 };
+}
+
+/** The air's own limit, to the tenth a gauge can be read to. */
+function airLimit(pascals: number, unit: string): string {
+  return withUnit(Number(fromSi(pascals, unit).toPrecision(3)), unit);
+}
+
 /** One truck's setup as lines to be shown. */
 export function truckView({ truck, yard, ...setup }: TruckSetup) {
   return {
     truck,
     yard: { id: yard.id, name: yard.name },
-    fittings: setup.fittings.map((fitting) => ({
-      id: fitting.id,
-      kind: fitting.kind,
-      line: plateLine(fitting),
-    })),
+    fittings: fittingGroups.flatMap(({ label, kinds }) => {
+      const fitted = setup.fittings.filter(({ kind }) => kinds.includes(kind));
+      return fitted.length === 0 ? [] : [{ label, fitted: fitted.map(fittingView) }];
+    }),
     removed: setup.removed.map((fitting) => ({
       id: fitting.id,
       kind: fitting.kind,

@@ -1,3 +1,4 @@
+import { Fragment } from "react";
 import { data, redirect } from "react-router";
 import { requirePermission } from "~/auth/require-permission";
 import { dbOf } from "~/context";
@@ -49,7 +50,7 @@ export default function Truck({ loaderData, actionData }: Route.ComponentProps) 
       >
         <MainLink to={`${base}/sheet`}>{words.sheet}</MainLink>
       </PageHead>
-      <SavedNote />
+      <SavedNote undo={(done) => done === "removed" && <PutBackLast view={loaderData} />} />
       {actionData?.faults.map((fault) => (
         <p key={fault} role="alert" className="mb-6 border-l-4 border-red bg-card p-3">
           {fault}
@@ -85,6 +86,18 @@ export default function Truck({ loaderData, actionData }: Route.ComponentProps) 
         </ActionButton>
       </Section>
     </>
+  );
+}
+
+/** The way back from the last "take off", beside the words that say it happened. */
+function PutBackLast({ view: { removed } }: { view: TruckView }) {
+  const [last] = removed;
+  if (!last) return null;
+  const label = office.truck.putBackOf(fittingKinds[last.kind]);
+  return (
+    <ActionButton name="restore-fitting" fields={{ fittingId: last.id }}>
+      {label}
+    </ActionButton>
   );
 }
 
@@ -125,31 +138,36 @@ function Fittings({ base, view: { fittings, removed } }: { base: string; view: T
       action={<ActionLink to={`${base}/fittings/new`}>{words.addFitting}</ActionLink>}
     >
       {fittings.length === 0 && <Empty>{words.noFittings}</Empty>}
-      {fittings.length > 0 && (
-        <ul className={ROWS}>
-          {fittings.map(({ id, kind, line }) => (
-            <li key={id} className={ROW}>
-              <span className="font-bold">{fittingKinds[kind]}</span>
-              <span>{line}</span>
-              <span className="flex gap-3">
-                <ActionLink
-                  to={`${base}/fittings/${id}`}
-                  label={words.changeOf(fittingKinds[kind])}
-                >
-                  {words.change}
-                </ActionLink>
-                <ActionButton
-                  name="remove-fitting"
-                  fields={{ fittingId: id }}
-                  label={words.takeOffOf(fittingKinds[kind])}
-                >
-                  {words.takeOff}
-                </ActionButton>
-              </span>
-            </li>
-          ))}
-        </ul>
-      )}
+      {fittings.map(({ label, fitted }) => (
+        <Fragment key={label}>
+          <h3 className="mt-6 mb-2 text-xl font-bold">{label}</h3>
+          <ul className={ROWS}>
+            {fitted.map(({ id, kind, line, hasPlate }) => (
+              <li key={id} className={ROW}>
+                <span className="font-bold">{fittingKinds[kind]}</span>
+                <span>{line}</span>
+                <span className="flex gap-3">
+                  {hasPlate && (
+                    <ActionLink
+                      to={`${base}/fittings/${id}`}
+                      label={words.changeOf(fittingKinds[kind])}
+                    >
+                      {words.change}
+                    </ActionLink>
+                  )}
+                  <ActionButton
+                    name="remove-fitting"
+                    fields={{ fittingId: id }}
+                    label={words.takeOffOf(fittingKinds[kind])}
+                  >
+                    {words.takeOff}
+                  </ActionButton>
+                </span>
+              </li>
+            ))}
+          </ul>
+        </Fragment>
+      ))}
       {removed.length > 0 && (
         <>
           <h3 className="mt-6 mb-2 text-xl font-bold">{words.takenOff}</h3>
