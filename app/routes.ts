@@ -6,6 +6,7 @@ export default [
   route("sign-in", "routes/auth/sign-in.tsx"),
   route("sign-out", "routes/auth/sign-out.tsx"),
   route("invitation/:token", "routes/auth/invitation.tsx"),
+  route("account", "routes/account/account.tsx"),
   route("office", "routes/office/office-layout.tsx", [
     index("routes/office/index.tsx"),
     route("yards", "routes/office/yards/list.tsx"),
@@ -22,5 +23,9 @@ export default [
     route("trucks/:unit/tests/:test", "routes/office/trucks/dated-test.tsx"),
     route("trucks/:unit/sheet", "routes/office/trucks/sheet.tsx"),
     route("checks", "routes/office/checks/checks.tsx"),
+    route("people", "routes/office/people/list.tsx"),
+    route("people/invite", "routes/office/people/invite.tsx"),
+    route("people/:personId", "routes/office/people/person.tsx"),
+    route("policy", "routes/office/policy/policy.tsx"),
   ]),
 ] satisfies RouteConfig;

@@ -19,12 +19,13 @@ export const phoneSchema = z
   .string()
   .trim()
   .regex(/^[+()\d .-]{3,32}$/, "phone-form")
-  .nullable();
+  .nullable()
+  .default(null);
 
 const place = {
   roles: z.array(z.enum(ROLES, { error: "roles-empty" })).min(1, "roles-empty"),
-  certifier: z.boolean(),
-  yardId: z.uuid({ error: "yard-unknown" }).nullable(),
+  certifier: z.boolean().default(false),
+  yardId: z.uuid({ error: "yard-unknown" }).nullable().default(null),
 };
 
 /** Dispatchers never sign off (K10): a certifier is something else as well. */
@@ -44,7 +45,12 @@ export const membershipSchema = z
     personId: z.uuid(),
     ...place,
     /** Place in the line of those called: 1 is called first; null is never called. */
-    onCall: z.number({ error: "on-call-place" }).int().min(1, "on-call-place").max(99).nullable(),
+    onCall: z
+      .int({ error: "on-call-place" })
+      .min(1, "on-call-place")
+      .max(99, "on-call-place")
+      .nullable()
+      .default(null),
   })
   .refine(certifierHasRole, certifierFault);
 export type MembershipInput = z.infer<typeof membershipSchema>;

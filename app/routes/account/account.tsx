@@ -1,0 +1,243 @@
+import { getFormProps, getInputProps, useForm } from "@conform-to/react";
+import { parseWithZod } from "@conform-to/zod/v4";
+import { data, Form, Link, redirect } from "react-router";
+import { z } from "zod";
+import { firstPlace } from "~/auth/first-place";
+import { requirePermission, requireSignedIn } from "~/auth/require-permission";
+import { dbOf } from "~/context";
+import { changeOwnPhone, readOwnAccount, switchCarrier } from "~/domain/people/own-account";
+import {
+  listSessions,
+  type OwnSession,
+  revokeOtherSessions,
+  revokeSession,
+} from "~/domain/people/own-sessions";
+import { phoneSchema } from "~/domain/people/person-input";
+import { refusedForm, unparsedForm } from "~/http/form-reply";
+import { systemClock } from "~/services/clock";
+import { accountText } from "~/text/en/people";
+import { refusalText } from "~/text/en/refusals";
+import { roleText } from "~/text/en/roles";
+import type { Route } from "./+types/account";
+
+const schema = z.discriminatedUnion("intent", [
+  z.object({ intent: z.literal("phone"), phone: phoneSchema }),
+  z.object({ intent: z.literal("end"), sessionId: z.uuid() }),
+  z.object({ intent: z.literal("end-others") }),
+  z.object({ intent: z.literal("switch"), carrierId: z.uuid() }),
+]);
+
+export async function loader({ context, url }: Route.LoaderArgs) {
+  const actor = requirePermission(context, "account.own");
+  const { sessionId, carrierName } = requireSignedIn(context);
+  const db = dbOf(context);
+  const account = await readOwnAccount(db, actor);
+  const sessions = await listSessions(db, actor, systemClock.now());
+  const { name, roles, carrierId } = actor;
+  const done = url.searchParams.get("done");
+  return { ...account, sessions, sessionId, name, roles, carrierId, carrierName, done };
+}
+
+export async function action({ request, context }: Route.ActionArgs) {
+  const actor = requirePermission(context, "account.own");
+  const { sessionId } = requireSignedIn(context);
+  const db = dbOf(context);
+  const submission = parseWithZod(await request.formData(), { schema });
+  if (submission.status !== "success") return unparsedForm(submission);
+  const asked = submission.value;
+  const run = () => {
+    switch (asked.intent) {
+      case "phone":
+        return changeOwnPhone(db, actor, asked);
+      case "end":
+        return revokeSession(db, actor, asked);
+      case "end-others":
+        return revokeOtherSessions(db, actor, { keep: sessionId });
+      case "switch":
+        return switchCarrier(db, actor, { sessionId, carrierId: asked.carrierId });
+    }
+  };
+  const done = await run();
+  if (!done.ok && done.refusal.code === "not-found") throw data(null, { status: 404 });
+  if (!done.ok) return refusedForm(submission, done.refusal);
+  return redirect(asked.intent === "switch" ? "/" : `/account?done=${asked.intent}`);
+}
+
+export default function Account({ loaderData, actionData }: Route.ComponentProps) {
+  const { name, roles, carrierName, carriers, email, sessions, sessionId, done } = loaderData;
+  const words = roles.map((role) => roleText[role]).join(", ");
+  return (
+    <main className="mx-auto max-w-2xl px-4 py-8">
+      <h1 className="text-3xl font-bold">{accountText.title}</h1>
+      <p className="mt-1 text-xl">{name}</p>
+      <p className="text-mute">{accountText.as(words, carrierName)}</p>
+      <div className="mt-5 flex flex-wrap gap-3">
+        <Link
+          to={firstPlace(loaderData)}
+          className="inline-flex min-h-11 items-center rounded-sm bg-enamel px-5 py-2 font-bold text-card no-underline"
+        >
+          {accountText.toWork}
+        </Link>
+        <Form method="post" action="/sign-out">
+          <QuietButton>{accountText.signOut}</QuietButton>
+        </Form>
+      </div>
+      {isNote(done) && (
+        <p role="status" className="mt-6 border-l-4 border-green bg-card p-3">
+          {NOTES[done]}
+        </p>
+      )}
+      <Section title={accountText.email}>
+        <p className="break-words">{email}</p>
+        <p className="text-base text-mute">{accountText.emailHint}</p>
+      </Section>
+      <Phone phone={loaderData.phone} result={actionData?.result} />
+      {carriers.length > 1 && <Carriers carriers={carriers} here={loaderData.carrierId} />}
+      <Devices sessions={sessions} current={sessionId} />
+    </main>
+  );
+}
+
+const NOTES = {
+  phone: accountText.phoneSaved,
+  end: accountText.ended,
+  "end-others": accountText.endedOthers,
+} as const;
+
+function isNote(word: string | null): word is keyof typeof NOTES {
+  return word !== null && Object.hasOwn(NOTES, word);
+}
+
+function Section({ title, children }: { title: string; children: React.ReactNode }) {
+  return (
+    <section className="mt-10 border-t border-line pt-5">
+      <h2 className="mb-3 text-xl font-bold">{title}</h2>
+      {children}
+    </section>
+  );
+}
+
+function QuietButton(props: React.ComponentProps<"button">) {
+  return (
+    <button
+      type="submit"
+      {...props}
+      className="min-h-11 rounded-sm border border-mute px-4 py-1 text-ink"
+    />
+  );
+}
+
+type Reply = NonNullable<Route.ComponentProps["actionData"]>["result"];
+
+function Phone({ phone, result }: { phone: string | null; result: Reply | undefined }) {
+  const [form, fields] = useForm<{ phone: string }>({
+    id: "phone",
+    lastResult: result,
+    defaultValue: { phone: phone ?? "" },
+  });
+  const { key, ...input } = getInputProps(fields.phone, { type: "tel" });
+  const fault = fields.phone.errors?.[0];
+  return (
+    <Section title={accountText.phone}>
+      <Form method="post" {...getFormProps(form)} className="flex flex-wrap items-start gap-3">
+        <input type="hidden" name="intent" value="phone" />
+        <div className="min-w-60 flex-1">
+          <label htmlFor={fields.phone.id} className="sr-only">
+            {accountText.phone}
+          </label>
+          <input
+            key={key}
+            {...input}
+            autoComplete="tel"
+            required={false}
+            aria-describedby={
+              fault
+                ? `${fields.phone.errorId} ${fields.phone.descriptionId}`
+                : fields.phone.descriptionId
+            }
+            className="min-h-11 w-full rounded-sm border border-mute bg-card px-3 py-2 tabular-nums aria-invalid:border-2 aria-invalid:border-red"
+          />
+          {fault && (
+            <p id={fields.phone.errorId} role="alert" className="mt-1 font-bold text-red">
+              {refusalText.field(fault)}
+            </p>
+          )}
+          <p id={fields.phone.descriptionId} className="mt-1 text-base text-mute">
+            {accountText.phoneHint}
+          </p>
+        </div>
+        <QuietButton>{accountText.savePhone}</QuietButton>
+      </Form>
+    </Section>
+  );
+}
+
+function Carriers({ carriers, here }: { carriers: { id: string; name: string }[]; here: string }) {
+  return (
+    <Section title={accountText.carriers}>
+      <p className="mb-3 text-mute">{accountText.carriersWhat}</p>
+      <Form method="post" className="flex flex-wrap gap-3">
+        <input type="hidden" name="intent" value="switch" />
+        {carriers.map(({ id, name }) =>
+          id === here ? (
+            <p
+              key={id}
+              className="inline-flex min-h-11 items-center border-b-4 border-enamel px-2 font-bold"
+            >
+              {name} · {accountText.here}
+            </p>
+          ) : (
+            <QuietButton key={id} name="carrierId" value={id}>
+              {accountText.switchTo(name)}
+            </QuietButton>
+          ),
+        )}
+      </Form>
+    </Section>
+  );
+}
+
+function Devices({ sessions, current }: { sessions: OwnSession[]; current: string }) {
+  return (
+    <Section title={accountText.devices}>
+      <ul className="divide-y divide-line border-y border-line">
+        {sessions.map(({ id, device, createdAt, lastSeenAt }) => {
+          const name = device || accountText.unknownDevice;
+          return (
+            <li key={id} className="flex flex-wrap items-center justify-between gap-3 py-3">
+              <span>
+                <span className="block font-bold">{name}</span>
+                <span className="text-base text-mute">
+                  {accountText.since(createdAt)}, {accountText.lastUsed(lastSeenAt)}
+                </span>
+              </span>
+              {id === current ? (
+                <span className="font-bold text-green">{accountText.thisDevice}</span>
+              ) : (
+                <Form method="post">
+                  <input type="hidden" name="sessionId" value={id} />
+                  <QuietButton
+                    name="intent"
+                    value="end"
+                    aria-label={accountText.endOf(name, createdAt)}
+                  >
+                    {accountText.end}
+                  </QuietButton>
+                </Form>
+              )}
+            </li>
+          );
+        })}
+      </ul>
+      {sessions.length > 1 && (
+        <Form method="post" className="mt-4">
+          <QuietButton name="intent" value="end-others">
+            {accountText.endOthers}
+          </QuietButton>
+        </Form>
+      )}
+    </Section>
+  );
+}
+
+export const meta: Route.MetaFunction = () => [{ title: accountText.metaTitle }];
