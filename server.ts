@@ -12,6 +12,7 @@ interface AppEntry {
   stop(): Promise<void>;
   loadContext(client: { address: string; requestId: string }): RouterContextProvider;
   pagePolicy(scriptSources: readonly string[]): Record<string, string>;
+  loggedPath(path: string): string;
   log: Record<"info" | "error", (detail: object, message: string) => void>;
 }
 
@@ -103,8 +104,8 @@ const server = createServer((request, response) => {
   response.setHeader("X-Request-Id", requestId);
   response.on("close", () => {
     const ms = Math.round(performance.now() - started);
-    const { method } = request;
-    app.log.info({ requestId, method, path, status: response.statusCode, ms }, "request");
+    const entry = { requestId, method: request.method, path: app.loggedPath(path) };
+    app.log.info({ ...entry, status: response.statusCode, ms }, "request");
   });
   if (bodyRefused(request, response)) return;
   if (path === "/healthz") {

@@ -5,10 +5,12 @@ import { isbot } from "isbot";
 import { renderToPipeableStream } from "react-dom/server";
 import { type EntryContext, type RouterContextProvider, ServerRouter } from "react-router";
 import { contentPolicy } from "./http/content-policy";
+import { loggedPath } from "./http/logged-path";
 import { NonceContext } from "./ui/nonce";
 
-export { health, loadContext, start, stop } from "./lifecycle";
 export { pagePolicy } from "./http/content-policy";
+export { loggedPath } from "./http/logged-path";
+export { health, loadContext, start, stop } from "./lifecycle";
 export { serverLog as log } from "./services/server-log";
 
 export const streamTimeout = 5_000;
@@ -41,9 +43,7 @@ export default function handleRequest(
           const body = new PassThrough();
           headers.set("Content-Type", "text/html; charset=utf-8");
           pipe(body);
-          resolve(
-            new Response(createReadableStreamFromReadable(body), { headers, status: code }),
-          );
+          resolve(new Response(createReadableStreamFromReadable(body), { headers, status: code }));
         },
         onShellError: reject,
         onError(error: unknown) {
@@ -59,7 +59,7 @@ export default function handleRequest(
 /** Errors of loaders, actions and rendering, without the address's query or anything typed. */
 export function handleError(error: unknown, { request }: { request: Request }): void {
   if (request.signal.aborted) return;
-  const path = new URL(request.url).pathname;
+  const path = loggedPath(new URL(request.url).pathname);
   console.error(JSON.stringify({ level: "error", path, error: describe(error) }));
 }
 
