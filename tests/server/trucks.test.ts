@@ -279,6 +279,25 @@ test("a truck has one pump; sight glasses may be several", async () => {
   value(await add("sight-glass", { count: 1 }));
 });
 
+test("a form's id that is another truck's fitting makes a fitting of its own", async () => {
+  const first = await platedTruck();
+  const { truckId } = await newTruck();
+  const ladder = addFittingSchema.parse({ kind: "ladder", id: first.pumpId });
+  const { id } = value(await addFitting(testDb(), manager, { truckId, ...ladder }, clock));
+  expect(id).not.toBe(first.pumpId);
+});
+
+test("two managers fitting a pump at once fit one", async () => {
+  const { truckId } = await newTruck();
+  const pump = addFittingSchema.parse({
+    kind: "pump",
+    attributes: { type: "vane", maxVacuumPa: { value: 27 } },
+  });
+  const add = () => addFitting(testDb(), manager, { truckId, ...pump }, clock);
+  const results = await Promise.all([add(), add(), add(), add()]);
+  expect(results.filter((result) => result.ok)).toHaveLength(1);
+});
+
 test("saving a fitting as it is shown changes nothing and ends no walk", async () => {
   const key = await newTruck();
   const attributes = {

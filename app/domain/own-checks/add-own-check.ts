@@ -1,7 +1,8 @@
+import { and, eq } from "drizzle-orm";
 import { v7 as uuidv7 } from "uuid";
 import { z } from "zod";
 import type { Db } from "../../db/client";
-import { errnoOf, FOREIGN_KEY } from "../../db/errors";
+import { DUPLICATE_KEY, errnoOf, FOREIGN_KEY } from "../../db/errors";
 import { inTransaction } from "../../db/retry";
 import { ownChecks } from "../../db/schema/trucks";
 import { type Clock, systemClock } from "../../services/clock";
@@ -16,6 +17,8 @@ const line = (code: string, most: number) =>
   z.string({ error: code }).trim().min(1, code).max(most, code);
 
 export const ownCheckSchema = z.object({
+  /** Made with the form, so that a form sent twice is one check. */
+  id: z.uuid().optional(),
   /** Null: on every truck. */
   truckId: z.uuid("truck-unknown").nullable().default(null),
   station: z.enum(STATIONS, { error: "station-unknown" }),
@@ -26,6 +29,16 @@ export const ownCheckSchema = z.object({
 });
 export type OwnCheckInput = z.infer<typeof ownCheckSchema>;
 
+/** The same form once more, or filled in anew? */
+async function isSame(db: Db, carrierId: string, { id = "", ...input }: OwnCheckInput) {
+  const [known] = await db
+    .select({ label: ownChecks.label, good: ownChecks.good, station: ownChecks.station })
+    .from(ownChecks)
+    .where(and(eq(ownChecks.carrierId, carrierId), eq(ownChecks.id, id)));
+  const { label, good, station } = input;
+  return known?.label === label && known.good === good && known.station === station;
+}
+
 /** A check of the carrier's own, from the next walk on: a walk already made stays good. */
 export async function addOwnCheck(
   db: Db,
@@ -34,7 +47,7 @@ export async function addOwnCheck(
   clock: Clock = systemClock,
 ): Promise<Result<{ id: string }>> {
   const { carrierId, personId } = actor;
-  const id = uuidv7();
+  const id = input.id ?? uuidv7();
   const now = clock.now();
   try {
     await inTransaction(db, async (tx) => {
@@ -45,6 +58,11 @@ export async function addOwnCheck(
       await writeChanges(tx, carrierId, now, [{ kind: "own-check", subjectId: id }]);
     });
   } catch (error) {
+    if (errnoOf(error) === DUPLICATE_KEY && input.id) {
+      return (await isSame(db, carrierId, input))
+        ? ok({ id })
+        : addOwnCheck(db, actor, { ...input, id: undefined }, clock);
+    }
     if (errnoOf(error) !== FOREIGN_KEY) throw error;
     return refuse("invalid", { fields: [{ pointer: "/truckId", code: "truck-unknown" }] });
   }

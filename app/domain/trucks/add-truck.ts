@@ -11,12 +11,15 @@ import { writeChanges } from "../feed";
 import { deriveGate } from "../gate/change-truck";
 import { readPolicy } from "../policy/read-policy";
 import { ok, type Result, refuse } from "../refusals";
+import { readTruck } from "./read-setup";
 import { writeSetupAudit } from "./setup-audit";
 import { unitNumberSchema } from "./unit-number";
 import { USUAL_TRUCKS, type UsualTruck, usualTruck } from "./usual-trucks";
 import { type VinWarning, vinSchema, vinWarning } from "./vin";
 
 export const addTruckSchema = z.object({
+  /** Made with the form, so that a form sent twice is one truck. */
+  id: z.uuid().optional(),
   unitNumber: unitNumberSchema,
   kind: z.enum(UNIT_KINDS, { error: "unit-kind" }),
   vin: vinSchema.default(null),
@@ -59,8 +62,9 @@ export async function addTruck(
 ): Promise<Result<TruckAdded>> {
   const { carrierId } = actor;
   const { unitNumber, kind, vin, yardId, start } = input;
-  const id = uuidv7();
+  const id = input.id ?? uuidv7();
   const now = clock.now();
+  const added = () => ok({ id, unitNumber, vinWarning: vinWarning(vin) });
   try {
     await inTransaction(db, async (tx) => {
       // Written before anything is read: the tables' own keys say whether the number is free
@@ -80,6 +84,8 @@ export async function addTruck(
   } catch (error) {
     const errno = errnoOf(error);
     if (errno === DUPLICATE_KEY) {
+      const known = await readTruck(db, { carrierId, truckId: id });
+      if (known?.unitNumber === unitNumber) return added();
       const values = { unitNumber };
       return refuse("invalid", {
         fields: [{ pointer: "/unitNumber", code: "unit-number-taken", values }],
@@ -90,5 +96,5 @@ export async function addTruck(
     }
     throw error;
   }
-  return ok({ id, unitNumber, vinWarning: vinWarning(vin) });
+  return added();
 }

@@ -48,6 +48,11 @@ function described({ field, hint }: Pick<FieldProps, "field" | "hint">) {
   return { ariaDescribedBy: hint ? field.descriptionId : undefined };
 }
 
+export function HiddenField({ field }: { field: FieldMetadata<unknown> }) {
+  const { key, ...input } = getInputProps(field, { type: "hidden" });
+  return <input key={key} {...input} />;
+}
+
 export function TextField({
   type = "text",
   ...props

@@ -1,6 +1,7 @@
 import { useForm } from "@conform-to/react";
 import { parseWithZod } from "@conform-to/zod/v4";
 import { redirect } from "react-router";
+import { v7 as uuidv7 } from "uuid";
 import { requirePermission } from "~/auth/require-permission";
 import { dbOf } from "~/context";
 import { addOwnCheck, ownCheckSchema } from "~/domain/own-checks/add-own-check";
@@ -9,7 +10,7 @@ import { removeOwnCheck, restoreOwnCheck } from "~/domain/own-checks/remove-own-
 import { listTrucks } from "~/domain/trucks/list-trucks";
 import { cadences, colours, office, stations } from "~/text/en/office";
 import { CADENCES, STATIONS } from "~/trade/sheet/check";
-import { ActionButton, OfficeForm, SelectField, TextField } from "../fields";
+import { ActionButton, HiddenField, OfficeForm, SelectField, TextField } from "../fields";
 import { idOr404, notFound, refusedForm, unparsed } from "../office-reply";
 import { Empty, PageHead, SavedNote } from "../page-parts";
 import type { Route } from "./+types/checks";
@@ -19,6 +20,7 @@ export async function loader({ context }: Route.LoaderArgs) {
   const db = dbOf(context);
   const checks = await listOwnChecks(db, actor);
   return {
+    id: uuidv7(),
     asked: checks.filter((check) => check.removedAt === null),
     takenOff: checks.filter((check) => check.removedAt !== null),
     trucks: (await listTrucks(db, actor)).map(({ id, unitNumber }) => ({
@@ -49,7 +51,7 @@ export async function action({ context, request }: Route.ActionArgs) {
 
 export default function OwnChecks({ loaderData, actionData }: Route.ComponentProps) {
   const words = office.checks;
-  const { asked, takenOff, trucks } = loaderData;
+  const { id, asked, takenOff, trucks } = loaderData;
   return (
     <>
       <PageHead title={words.title} lead={words.what} />
@@ -60,7 +62,7 @@ export default function OwnChecks({ loaderData, actionData }: Route.ComponentPro
         <List rows={asked} intent="remove" action={words.remove} actionOf={words.removeOf} />
       )}
       <h2 className="mt-12 mb-4 text-2xl font-bold">{words.add}</h2>
-      <AddCheck key={asked.length} trucks={trucks} result={actionData?.result} />
+      <AddCheck key={asked.length} id={id} trucks={trucks} result={actionData?.result} />
       {takenOff.length > 0 && (
         <>
           <h2 className="mt-12 mb-4 text-2xl font-bold">{words.takenOff}</h2>
@@ -109,19 +111,28 @@ function List(props: {
   );
 }
 
-type Shown = Record<"label" | "good" | "station" | "cadence" | "colour" | "truckId", string>;
+type Shown = Record<"id" | "label" | "good" | "station" | "cadence" | "colour" | "truckId", string>;
 type Trucks = Route.ComponentProps["loaderData"]["trucks"];
 type Answer = NonNullable<Route.ComponentProps["actionData"]>["result"];
 
-function AddCheck({ trucks, result }: { trucks: Trucks; result: Answer | undefined }) {
+function AddCheck({
+  id,
+  trucks,
+  result,
+}: {
+  id: string;
+  trucks: Trucks;
+  result: Answer | undefined;
+}) {
   const words = office.checks;
   const [form, fields] = useForm<Shown>({
     id: "own-check",
     lastResult: result,
-    defaultValue: { cadence: "daily", colour: "yellow" },
+    defaultValue: { id, cadence: "daily", colour: "yellow" },
   });
   return (
     <OfficeForm form={form} submit={words.submit}>
+      <HiddenField field={fields.id} />
       <TextField field={fields.label} label={words.label} hint={words.labelHint} maxLength={80} />
       <TextField field={fields.good} label={words.good} hint={words.goodHint} maxLength={160} />
       <SelectField

@@ -1,5 +1,6 @@
 import { parseWithZod } from "@conform-to/zod/v4";
 import { Form, redirect } from "react-router";
+import { v7 as uuidv7 } from "uuid";
 import { requirePermission } from "~/auth/require-permission";
 import { dbOf } from "~/context";
 import { addFitting, addFittingSchema } from "~/domain/trucks/add-fitting";
@@ -23,6 +24,7 @@ export async function loader({ context, params, request }: Route.LoaderArgs) {
   const { truck, fittings } = await truckOr404(dbOf(context), actor, params.unit);
   const carried = new Set(fittings.map((fitting) => fitting.kind));
   return {
+    id: uuidv7(),
     unitNumber: truck.unitNumber,
     kind: kindIn(request.url),
     free: FITTING_KINDS.filter((kind) => mayCarrySeveral(kind) || !carried.has(kind)),
@@ -41,7 +43,7 @@ export async function action({ context, params, request }: Route.ActionArgs) {
 }
 
 export default function AddFitting({ loaderData, actionData }: Route.ComponentProps) {
-  const { unitNumber, kind, free } = loaderData;
+  const { id, unitNumber, kind, free } = loaderData;
   const back = `/office/trucks/${unitNumber}`;
   if (kind === null) {
     return (
@@ -59,6 +61,7 @@ export default function AddFitting({ loaderData, actionData }: Route.ComponentPr
       />
       <FittingForm
         key={kind}
+        id={id}
         kind={kind}
         plate={{}}
         submit={office.truck.addIt}

@@ -16,7 +16,14 @@ import {
   unitLabel,
 } from "~/text/en/office";
 import type { FittingKind } from "~/trade/fittings";
-import { AmountField, CheckField, OfficeForm, SelectField, TextField } from "../fields";
+import {
+  AmountField,
+  CheckField,
+  HiddenField,
+  OfficeForm,
+  SelectField,
+  TextField,
+} from "../fields";
 
 interface Amount {
   value: string | number | undefined;
@@ -31,6 +38,7 @@ export interface ShownPlate extends Partial<Record<AmountName, Amount>> {
 }
 
 type Typed = {
+  id?: string;
   attributes: Partial<Record<AmountName, Amount>> &
     Partial<Record<FlagName, string>> & { type?: string; grade?: string; count?: string | number };
 };
@@ -50,12 +58,15 @@ function asTyped(kind: FittingKind, { flags = [], ...plate }: ShownPlate): Typed
 
 /** The plate of one fitting: which fields it has follows from its kind. */
 export function FittingForm({
+  id,
   kind,
   plate,
   submit,
   cancelTo,
   result,
 }: {
+  /** Of a fitting that is not there yet. */
+  id?: string;
   kind: FittingKind;
   plate: ShownPlate;
   submit: string;
@@ -65,13 +76,14 @@ export function FittingForm({
   const [form, fields] = useForm<Typed>({
     id: "fitting",
     lastResult: result,
-    defaultValue: asTyped(kind, plate),
+    defaultValue: { id, ...asTyped(kind, plate) },
   });
   const attributes = fields.attributes.getFieldset();
   const shown = fittingFields(kind);
   return (
     <OfficeForm form={form} submit={submit} cancelTo={cancelTo}>
       <input type="hidden" name="kind" value={kind} />
+      {id && <HiddenField field={fields.id} />}
       {shown.length === 0 && <p>{office.truck.nothingToFill}</p>}
       {shown.map((field) => (
         <PlateField key={field.name} kind={kind} field={field} attributes={attributes} />

@@ -1,6 +1,7 @@
 import { useForm } from "@conform-to/react";
 import { parseWithZod } from "@conform-to/zod/v4";
 import { redirect } from "react-router";
+import { v7 as uuidv7 } from "uuid";
 import { requirePermission } from "~/auth/require-permission";
 import { dbOf } from "~/context";
 import { addTruck, addTruckSchema } from "~/domain/trucks/add-truck";
@@ -8,7 +9,7 @@ import { USUAL_TRUCKS } from "~/domain/trucks/usual-trucks";
 import { listYards } from "~/domain/yards/read-yards";
 import { office, unitKinds, usualTrucks } from "~/text/en/office";
 import { UNIT_KINDS } from "~/trade/sheet/check";
-import { OfficeForm, SelectField, TextField } from "../fields";
+import { HiddenField, OfficeForm, SelectField, TextField } from "../fields";
 import { refusedForm, unparsed } from "../office-reply";
 import { PageHead, TextLink } from "../page-parts";
 import type { Route } from "./+types/new";
@@ -16,7 +17,10 @@ import type { Route } from "./+types/new";
 export async function loader({ context }: Route.LoaderArgs) {
   const actor = requirePermission(context, "truck.manage");
   const yards = await listYards(dbOf(context), actor);
-  return { yards: yards.map(({ id, name }) => ({ value: id, label: name })) };
+  return {
+    id: uuidv7(),
+    yards: yards.map(({ id, name }) => ({ value: id, label: name })),
+  };
 }
 
 export async function action({ context, request }: Route.ActionArgs) {
@@ -29,6 +33,7 @@ export async function action({ context, request }: Route.ActionArgs) {
 }
 
 type ShownTruck = {
+  id: string;
   unitNumber: string;
   kind: string;
   vin: string;
@@ -36,12 +41,13 @@ type ShownTruck = {
   start: string;
 };
 
-export default function NewTruck({ loaderData: { yards }, actionData }: Route.ComponentProps) {
+export default function NewTruck({ loaderData: { id, yards }, actionData }: Route.ComponentProps) {
   const words = office.trucks;
   const [form, fields] = useForm<ShownTruck>({
     id: "truck",
     lastResult: actionData?.result,
     defaultValue: {
+      id,
       kind: "powered",
       start: USUAL_TRUCKS[0],
       yardId: yards.length === 1 ? yards[0]?.value : "",
@@ -55,6 +61,7 @@ export default function NewTruck({ loaderData: { yards }, actionData }: Route.Co
         submit={words.submit}
         cancelTo={<TextLink to="/office/trucks">{office.cancel}</TextLink>}
       >
+        <HiddenField field={fields.id} />
         <TextField
           field={fields.unitNumber}
           label={words.unit}
