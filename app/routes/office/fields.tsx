@@ -22,7 +22,7 @@ export interface Option {
 }
 
 const BOX =
-  "min-h-11 w-full rounded-sm border border-mute bg-card px-3 py-2 text-ink aria-invalid:border-2 aria-invalid:border-red";
+  "min-h-11 rounded-sm border border-mute bg-card px-3 py-2 text-ink aria-invalid:border-2 aria-invalid:border-red";
 
 function Errors({ id, errors }: { id: string; errors: readonly string[] | undefined }) {
   if (!errors?.length) return null;
@@ -67,7 +67,7 @@ export function TextField({
       <label htmlFor={field.id} className="font-bold">
         {label}
       </label>
-      <input key={key} {...input} {...rest} autoComplete="off" className={BOX} />
+      <input key={key} {...input} {...rest} autoComplete="off" className={`${BOX} w-full`} />
       <Hint id={field.descriptionId} hint={hint} />
       <Errors id={field.errorId} errors={field.errors} />
     </div>
@@ -85,7 +85,7 @@ export function SelectField({
       <label htmlFor={field.id} className="font-bold">
         {label}
       </label>
-      <select key={key} {...select} className={BOX}>
+      <select key={key} {...select} className={`${BOX} w-full`}>
         {options.map((option) =>
           "options" in option ? (
             <optgroup key={option.label} label={option.label}>
@@ -128,7 +128,7 @@ export function AmountField({
           {...input}
           inputMode="decimal"
           autoComplete="off"
-          className={`${BOX} tabular-nums`}
+          className={`${BOX} min-w-0 flex-1 tabular-nums`}
         />
         <select
           key={unitKey}

@@ -61,13 +61,13 @@ export default function Truck({ loaderData, actionData }: Route.ComponentProps) 
           {words.gateFault}
         </p>
       )}
-      <dl className="mb-4 grid grid-cols-[8rem_1fr] gap-y-2">
+      <dl className="mb-4 grid grid-cols-[4rem_1fr] gap-y-2 sm:grid-cols-[8rem_1fr]">
         <dt className="text-mute">{office.trucks.kind}</dt>
         <dd>{unitKinds[truck.kind]}</dd>
         <dt className="text-mute">{office.trucks.yard}</dt>
         <dd>{yard.name}</dd>
         <dt className="text-mute">{office.trucks.vin}</dt>
-        <dd>
+        <dd className="break-words">
           {truck.vin ?? words.noVin}
           {truck.vinWarning && <p className="text-mute">{vinWarnings[truck.vinWarning]}</p>}
         </dd>
@@ -126,6 +126,8 @@ function Section(props: {
 }
 
 const ROWS = "divide-y divide-line border-y border-line";
+const FITTED =
+  "grid grid-cols-[1fr_auto] items-center gap-x-6 py-2 sm:grid-cols-[14rem_1fr_auto] sm:py-3";
 const ROW = "grid gap-x-6 gap-y-1 py-3 sm:grid-cols-[14rem_1fr_auto] sm:items-center";
 
 function Fittings({ base, view: { fittings, removed } }: { base: string; view: TruckView }) {
@@ -143,10 +145,10 @@ function Fittings({ base, view: { fittings, removed } }: { base: string; view: T
           <h3 className="mt-6 mb-2 text-xl font-bold">{label}</h3>
           <ul className={ROWS}>
             {fitted.map(({ id, kind, line, hasPlate }) => (
-              <li key={id} className={ROW}>
+              <li key={id} className={FITTED}>
                 <span className="font-bold">{fittingKinds[kind]}</span>
-                <span>{line}</span>
-                <span className="flex gap-3">
+                <span className="col-start-1 sm:col-start-2">{line}</span>
+                <span className="col-start-2 row-span-2 row-start-1 flex flex-col gap-2 sm:col-start-3 sm:flex-row sm:gap-3">
                   {hasPlate && (
                     <ActionLink
                       to={`${base}/fittings/${id}`}
