@@ -87,6 +87,21 @@ function bodyRefused(request: IncomingMessage, response: ServerResponse): boolea
   return true;
 }
 
+/**
+ * Node 20 writes repeated headers one over the other once any header was set before: of two
+ * cookies one is lost. What the routes' listener hands over in pairs is appended instead.
+ */
+function keepingRepeated(response: ServerResponse): ServerResponse {
+  const writeHead = response.writeHead.bind(response);
+  response.writeHead = ((status: number, pairs: readonly string[] = []) => {
+    for (let n = 0; n + 1 < pairs.length; n += 2) {
+      response.appendHeader(pairs[n] ?? "", pairs[n + 1] ?? "");
+    }
+    return writeHead(status);
+  }) as typeof response.writeHead;
+  return response;
+}
+
 async function health(response: ServerResponse): Promise<void> {
   const state = await app.health();
   response.writeHead(state.ok ? 200 : 503, {
@@ -113,10 +128,10 @@ const server = createServer((request, response) => {
     return;
   }
   if (request.method === "GET" || request.method === "HEAD") {
-    files(request, response, () => routes(request, response));
+    files(request, response, () => routes(request, keepingRepeated(response)));
     return;
   }
-  routes(request, response);
+  routes(request, keepingRepeated(response));
 });
 
 let stopping = false;
