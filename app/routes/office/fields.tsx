@@ -238,3 +238,28 @@ export function ActionButton({
     </Form>
   );
 }
+
+/** A command that is not taken back with one press: asked once more, without a script as well. */
+export function ConfirmedButton({
+  question,
+  children,
+  label,
+  ...button
+}: ComponentProps<typeof ActionButton> & { question: string }) {
+  return (
+    <details className="relative">
+      <summary
+        aria-label={label}
+        className="inline-flex min-h-11 cursor-pointer items-center rounded-sm border border-mute px-3 py-1"
+      >
+        {children}
+      </summary>
+      <div className="mt-2 max-w-xs border-l-4 border-yellow bg-card p-3">
+        <p className="mb-2">{question}</p>
+        <ActionButton {...button} label={label}>
+          {children}
+        </ActionButton>
+      </div>
+    </details>
+  );
+}

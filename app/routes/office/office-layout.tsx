@@ -1,3 +1,4 @@
+import type { ReactNode } from "react";
 import { NavLink, Outlet } from "react-router";
 import { requirePermission } from "~/auth/require-permission";
 import { office } from "~/text/en/office";
@@ -26,7 +27,7 @@ export default function OfficeLayout() {
   );
 }
 
-function Frame({ children }: { children: React.ReactNode }) {
+function Frame({ children }: { children: ReactNode }) {
   return (
     <div className="mx-auto max-w-5xl px-4 pb-16">
       <nav aria-label={office.sections} className="mb-6 border-b border-line print:hidden">
@@ -48,6 +49,8 @@ function Frame({ children }: { children: React.ReactNode }) {
     </div>
   );
 }
+
+export const meta: Route.MetaFunction = () => [{ title: `${office.title} · ${office.product}` }];
 
 export function ErrorBoundary() {
   return (

@@ -431,6 +431,8 @@ export const office = {
     setIt: "Set",
     setOf: (reading: string) => `Set: ${reading}`,
     clear: "Clear",
+    clearQuestion:
+      "Its values go off this page, and its half of the run-up cannot be run until there are new ones.",
     clearOf: (reading: string) => `Clear: ${reading}`,
     point: "Set point",
     low: "Low end of the band",
@@ -479,6 +481,7 @@ export const office = {
     noteHint: "Where the paper is kept, or who did it.",
     saveTest: "Record the test",
     end: "No longer needed",
+    endQuestion: "Its date no longer holds the key. To have it count again, record it anew.",
     endOf: (test: string) => `No longer needed: ${test}`,
     leftOver:
       "Recorded for an earlier plate. It still holds the key after its last day until you say it is no longer needed.",
@@ -521,9 +524,9 @@ export const office = {
     none: "No check of your own yet.",
     add: "Add a check",
     label: "What to look at",
-    labelHint: "Blue drum strapped",
+    labelHint: "For example: Blue drum strapped",
     good: "What good looks like",
-    goodHint: "One line. Both straps tight, lid on.",
+    goodHint: "One line. For example: Both straps tight, lid on",
     station: "Station",
     cadence: "How often",
     colour: "Tag when it is not right",

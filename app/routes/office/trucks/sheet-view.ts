@@ -6,6 +6,7 @@ import {
   COULD_NOT_CHECK,
   NOT_FITTED,
   type Problem,
+  type RunUpHalf,
   type Sheet,
 } from "~/trade/sheet/check";
 import { allChecks, dueChecks, roundChecks } from "~/trade/sheet/due-checks";
@@ -71,8 +72,9 @@ function marks(check: Check): string[] {
 }
 
 /** The sheet as it is printed: stations in walking order, and how many checks a day. */
-export function sheetView(sheet: Sheet) {
-  const daily = dueChecks(sheet, { walkKind: "before" }).length;
+export function sheetView(sheet: Sheet, { bothHalvesDaily }: { bothHalvesDaily: boolean }) {
+  const halves: readonly RunUpHalf[] = bothHalvesDaily ? sheet.halves : ["vacuum"];
+  const daily = dueChecks(sheet, { walkKind: "before", halves }).length;
   const before = (more: Parameters<typeof dueChecks>[1]) => dueChecks(sheet, more).length - daily;
   const weekly = allChecks(sheet).filter(
     (c) => c.cadence === "weekly" && c.who === "driver",

@@ -1,5 +1,6 @@
 import { requirePermission } from "~/auth/require-permission";
 import { dbOf } from "~/context";
+import { readPolicy } from "~/domain/policy/read-policy";
 import { sheetForTruck } from "~/domain/sheets/sheet-for-truck";
 import { cautions } from "~/text/en/cautions";
 import { office, readings } from "~/text/en/office";
@@ -17,7 +18,8 @@ export async function loader({ context, params }: Route.LoaderArgs) {
   const { truck } = await truckOr404(db, actor, params.unit);
   const made = await sheetForTruck(db, actor, truck.id);
   if (!made.ok) notFound("truck");
-  return { unitNumber: truck.unitNumber, view: sheetView(made.value.sheet) };
+  const { settings } = await readPolicy(db, actor.carrierId);
+  return { unitNumber: truck.unitNumber, view: sheetView(made.value.sheet, settings) };
 }
 
 export default function TruckSheet({ loaderData: { unitNumber, view } }: Route.ComponentProps) {

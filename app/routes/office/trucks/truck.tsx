@@ -5,7 +5,7 @@ import { dbOf } from "~/context";
 import { type FieldFault, REFUSAL_STATUS } from "~/domain/refusals";
 import { fittingKinds, office, unitKinds, vinWarnings } from "~/text/en/office";
 import { refusalText } from "~/text/en/refusals";
-import { ActionButton } from "../fields";
+import { ActionButton, ConfirmedButton } from "../fields";
 import { notFound } from "../office-reply";
 import { ActionLink, Empty, MainLink, PageHead, SavedNote } from "../page-parts";
 import { StandingOf } from "../standing-of";
@@ -215,13 +215,14 @@ function SetPoints({ base, view: { setPoints } }: { base: string; view: TruckVie
                 {line.set ? words.change : words.setIt}
               </ActionLink>
               {line.set && (
-                <ActionButton
+                <ConfirmedButton
                   name="remove-set-point"
                   fields={{ reading: line.reading }}
                   label={words.clearOf(line.label)}
+                  question={words.clearQuestion}
                 >
                   {words.clear}
-                </ActionButton>
+                </ConfirmedButton>
               )}
             </span>
           </li>
@@ -254,13 +255,14 @@ function Tests({ base, view: { tests, testsLeftOver } }: { base: string; view: T
                 {words.record}
               </ActionLink>
               {line.mayEnd && (
-                <ActionButton
+                <ConfirmedButton
                   name="end-test"
                   fields={{ kind: line.test }}
                   label={words.endOf(line.label)}
+                  question={words.endQuestion}
                 >
                   {words.end}
-                </ActionButton>
+                </ConfirmedButton>
               )}
             </span>
           </li>
@@ -272,13 +274,14 @@ function Tests({ base, view: { tests, testsLeftOver } }: { base: string; view: T
               {line.dates}
               <span className="block text-mute">{words.leftOver}</span>
             </span>
-            <ActionButton
+            <ConfirmedButton
               name="end-test"
               fields={{ kind: line.kind }}
               label={words.endOf(line.label)}
+              question={words.endQuestion}
             >
               {words.end}
-            </ActionButton>
+            </ConfirmedButton>
           </li>
         ))}
       </ul>
