@@ -9,6 +9,7 @@ import { mailOutbox, memberships, people, sessions } from "~/db/schema/people";
 import type { Role } from "~/domain/actor";
 import { invitePerson } from "~/domain/people/invite-person";
 import { makeToken } from "~/domain/tokens";
+import { loggedPath } from "~/http/logged-path";
 import * as invitation from "~/routes/auth/invitation";
 import * as signIn from "~/routes/auth/sign-in";
 import * as signOut from "~/routes/auth/sign-out";
@@ -345,4 +346,11 @@ test("an invited person joins by POST alone and then signs in by code", async ()
   expect(done.headers.get("Location")).toBe("/bench");
   const again = await openBrowser().send(invitation, path, { params });
   expect(again.data).toMatchObject({ accepted: true });
+});
+
+test("a log keeps no invitation's token", () => {
+  const token = makeToken();
+  expect(loggedPath(`/invitation/${token}`)).toBe("/invitation/…");
+  expect(loggedPath(`/invitation/${token}.data`)).toBe("/invitation/….data");
+  expect(loggedPath("/office/people")).toBe("/office/people");
 });

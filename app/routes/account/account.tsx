@@ -212,7 +212,7 @@ function Devices({ sessions, current }: { sessions: OwnSession[]; current: strin
                 </span>
               </span>
               {id === current ? (
-                <span className="font-bold text-green">{accountText.thisDevice}</span>
+                <span className="font-bold">{accountText.thisDevice}</span>
               ) : (
                 <Form method="post">
                   <input type="hidden" name="sessionId" value={id} />
