@@ -293,8 +293,6 @@ export const office = {
   sections: "Parts of the office",
   save: "Save",
   cancel: "Cancel",
-  back: "Back",
-  required: "needed",
   unitOf: (field: string) => `Unit of ${field.toLowerCase()}`,
   formFault: "Some of this needs another look. What you typed is still here.",
   choose: "Choose",
@@ -353,13 +351,6 @@ export const office = {
     winterHint: "The sheet then says what to do at a frozen drain or an iced ladder.",
     trucks: (count: number) => (count === 0 ? "no trucks yet" : plural(count, "truck", "trucks")),
     opens: (clock: string) => `shop opens ${clock}`,
-    columns: {
-      name: "Yard",
-      zone: "Time zone",
-      elevation: "Elevation",
-      shop: "Shop opens",
-      trucks: "Trucks",
-    },
   },
   trucks: {
     title: "Trucks",
@@ -382,7 +373,6 @@ export const office = {
   },
   truck: {
     sheet: "The sheet that follows",
-    details: "Details",
     changeDetails: "Change details",
     detailsTitle: (unit: string) => `Details of ${unit}`,
     saveDetails: "Save details",
@@ -410,7 +400,6 @@ export const office = {
     whichFitting: "Which fitting?",
     next: "Next",
     fittingTitle: (unit: string, kind: string) => `${kind} on ${unit}`,
-    plate: "From its plate",
     nothingToFill:
       "There is nothing to fill in for this one. It is fitted, and its checks are on the sheet.",
     saveFitting: "Save the fitting",
@@ -464,8 +453,7 @@ export const office = {
     },
     lastDay: (day: string) => `last day ${day}`,
     passed: (day: string) => `passed ${day}`,
-    every: (months: number) =>
-      months % 12 === 0 ? plural(months / 12, "year", "years") : `${months} months`,
+    /** How often, and whose rule. */
     everyLine: (months: number, source: string) =>
       `Every ${months % 12 === 0 ? plural(months / 12, "year", "years") : `${months} months`} (${source})`,
     permitLead: "The permit itself says until when it counts.",
@@ -489,7 +477,6 @@ export const office = {
   sheet: {
     title: (unit: string) => `The sheet of ${unit}`,
     what: "Made from its fittings and set points. A driver sees one station at a time.",
-    print: "Print",
     daily: (count: number) => plural(count, "check on a plain day", "checks on a plain day"),
     pressure: (count: number) =>
       `${count} more when the day's run off-loads by pressure, or weekly`,
@@ -500,7 +487,6 @@ export const office = {
     missing:
       "The office still owes these set points. Without them a half of the run-up cannot be run:",
     station: (label: string, place: number) => `${place}. ${label}`,
-    good: "Good",
     steps: "Steps",
     ifNot: "If not",
     shopWork: "Shop",
@@ -513,9 +499,7 @@ export const office = {
     own: "Your own",
     expected: (count: number) => `expects ${count}`,
     setPoint: (value: string) => `set point ${value}`,
-    driverFix: "driver-fix",
-    atTheTruck: "at the truck only",
-    walks: { before: "before", after: "after", takeover: "takeover" },
+    driverFix: (problem: string) => `${problem} (driver-fix)`,
     back: (unit: string) => `Back to ${unit}`,
   },
   checks: {

@@ -22,9 +22,10 @@ export interface ProblemLine {
 
 function problemLines(problems: readonly Problem[]): ProblemLine[] {
   const lines = new Map<string, ProblemLine>();
-  for (const { key, label, colour, limit } of problems) {
+  for (const { key, label: name, colour, limit, driverFix } of problems) {
     if (key === COULD_NOT_CHECK || key === NOT_FITTED) continue;
     const words = limit ? limitWords(limit) : null;
+    const label = driverFix ? office.sheet.driverFix(name) : name;
     const line = lines.get(`${colour} ${words}`);
     if (line) line.labels.push(label);
     else {

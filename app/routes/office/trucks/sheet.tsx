@@ -32,13 +32,19 @@ export default function TruckSheet({ loaderData: { unitNumber, view } }: Route.C
       </PageHead>
       <Counts view={view} back={back} />
       {view.stations.map((station, index) => (
-        <section key={station.key} aria-labelledby={station.key} className="mb-10">
+        <section
+          key={station.key}
+          aria-labelledby={station.key}
+          className="mb-10 print:mb-4 print:text-[10px] print:leading-snug"
+        >
           <h2
             id={station.key}
-            className="mb-2 border-b-2 border-ink pb-1 text-2xl font-bold break-after-avoid"
+            className="mb-2 border-b-2 border-ink pb-1 text-2xl font-bold break-after-avoid print:mb-0 print:text-base"
           >
             {words.station(station.label, index + 1)}
-            <span className="ml-3 text-base font-normal text-mute">{station.engine}</span>
+            <span className="ml-3 text-base font-normal text-mute print:text-[10px]">
+              {station.engine}
+            </span>
           </h2>
           {station.caution && <Caution caution={station.caution} />}
           <ul className="divide-y divide-line">
@@ -100,7 +106,7 @@ function Counts({ view, back }: { view: SheetView; back: string }) {
 function CheckOnSheet({ check }: { check: SheetView["stations"][number]["checks"][number] }) {
   const words = office.sheet;
   return (
-    <li className="grid gap-x-6 gap-y-2 py-4 break-inside-avoid md:grid-cols-2">
+    <li className="grid gap-x-6 gap-y-2 py-4 break-inside-avoid md:grid-cols-2 print:grid-cols-2 print:py-1">
       <div>
         <h3 className="font-bold">{check.label}</h3>
         <p>{check.good}</p>
@@ -114,10 +120,12 @@ function CheckOnSheet({ check }: { check: SheetView["stations"][number]["checks"
           </ol>
         )}
         {check.marks.length > 0 && (
-          <p className="mt-1 text-base text-mute">{check.marks.join(" · ")}</p>
+          <p className="mt-1 text-base text-mute print:mt-0 print:text-[10px]">
+            {check.marks.join(" · ")}
+          </p>
         )}
       </div>
-      <ul aria-label={words.ifNot} className="space-y-1">
+      <ul aria-label={words.ifNot} className="space-y-1 print:space-y-0">
         {check.problems.map((line) => (
           <Problems key={`${line.colour} ${line.limit}`} line={line} />
         ))}
@@ -136,7 +144,7 @@ function Problems({ line }: { line: ProblemLine }) {
   return (
     <li className="flex items-baseline gap-3">
       <span
-        className={`w-20 shrink-0 border px-2 text-center text-base font-bold print:bg-white print:text-black ${TAG[line.colour]}`}
+        className={`w-20 shrink-0 border px-2 text-center text-base font-bold print:w-14 print:bg-white print:text-[10px] print:text-black ${TAG[line.colour]}`}
       >
         {line.word}
       </span>
@@ -151,7 +159,7 @@ function Problems({ line }: { line: ProblemLine }) {
 function Caution({ caution }: { caution: CautionKey }) {
   const { title, text } = cautions[caution];
   return (
-    <p className="my-2 border border-mute p-2">
+    <p className="my-2 border border-mute p-2 print:my-1 print:p-1">
       <span className="font-bold">{title}.</span> {text}
     </p>
   );
