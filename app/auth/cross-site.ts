@@ -6,7 +6,7 @@ import { authText } from "../text/en/auth";
 const READS = new Set(["GET", "HEAD", "OPTIONS"]);
 
 /** Did this site's own page send it? The public origin is told, so a proxy that ends TLS changes nothing. */
-export function isSameSite(headers: Headers, publicOrigin: string): boolean {
+function isSameSite(headers: Headers, publicOrigin: string): boolean {
   return headers.get("Origin") === publicOrigin || headers.get("Sec-Fetch-Site") === "same-origin";
 }
 

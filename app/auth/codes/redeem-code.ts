@@ -8,7 +8,7 @@ import { type Started, startSession } from "../sessions/start-session";
 import { codeHash } from "./issue-code";
 import { newestCode, type PendingCode } from "./pending-code";
 
-export const TRIES = 5;
+const TRIES = 5;
 
 export interface CodeToRedeem {
   code: string;
