@@ -4,15 +4,18 @@ import { Links, Meta, Outlet, Scripts, ScrollRestoration } from "react-router";
 import type { Route } from "./+types/root";
 import { crossSiteMiddleware } from "./auth/cross-site";
 import { sessionMiddleware } from "./auth/session";
+import { ThemeScript } from "./ui/theme-switch";
 
 export const middleware: Route.MiddlewareFunction[] = [crossSiteMiddleware, sessionMiddleware];
 
 export function Layout({ children }: { children: ReactNode }) {
   return (
-    <html lang="en-US">
+    <html lang="en-US" suppressHydrationWarning>
       <head>
         <meta charSet="utf-8" />
         <meta name="viewport" content="width=device-width, initial-scale=1" />
+        <link rel="icon" href="/icon.svg" type="image/svg+xml" />
+        <ThemeScript />
         <Meta />
         <Links />
       </head>

@@ -1,0 +1,50 @@
+import { useSyncExternalStore } from "react";
+
+export type Theme = "day" | "night";
+
+const KEY = "keypeg.theme";
+const CHANGED = "keypeg:theme";
+
+/** Sets the choice kept on this device before the first paint. Backticks, since React escapes quotes. */
+export const THEME_SCRIPT =
+  "try{const t=localStorage.getItem(`keypeg.theme`);if(t)document.documentElement.dataset.theme=t}catch{}";
+
+function phoneTheme(): Theme {
+  return matchMedia("(prefers-color-scheme: dark)").matches ? "night" : "day";
+}
+
+function shownTheme(): Theme {
+  const chosen = document.documentElement.dataset.theme;
+  return chosen === "day" || chosen === "night" ? chosen : phoneTheme();
+}
+
+/** The other set of colors. Choosing what the phone has anyway lets the phone decide again. */
+export function switchTheme(): void {
+  const next: Theme = shownTheme() === "day" ? "night" : "day";
+  const root = document.documentElement;
+  const chosen = next === phoneTheme() ? null : next;
+  if (chosen) root.dataset.theme = chosen;
+  else delete root.dataset.theme;
+  try {
+    if (chosen) localStorage.setItem(KEY, chosen);
+    else localStorage.removeItem(KEY);
+  } catch {
+    // Storage is off on this device: the choice lasts until the page is left.
+  }
+  window.dispatchEvent(new Event(CHANGED));
+}
+
+function subscribe(changed: () => void): () => void {
+  const phone = matchMedia("(prefers-color-scheme: dark)");
+  phone.addEventListener("change", changed);
+  window.addEventListener(CHANGED, changed);
+  return () => {
+    phone.removeEventListener("change", changed);
+    window.removeEventListener(CHANGED, changed);
+  };
+}
+
+/** What is shown now; null on the server and until the page is alive. */
+export function useTheme(): Theme | null {
+  return useSyncExternalStore(subscribe, shownTheme, () => null);
+}
