@@ -3,6 +3,7 @@ import { index, type RouteConfig, route } from "@react-router/dev/routes";
 export default [
   index("routes/home.tsx"),
   route("safety", "routes/safety.tsx"),
+  route("pieces", "routes/pieces/pieces.tsx"),
   route("sign-in", "routes/auth/sign-in.tsx"),
   route("sign-out", "routes/auth/sign-out.tsx"),
   route("invitation/:token", "routes/auth/invitation.tsx"),
