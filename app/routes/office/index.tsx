@@ -3,8 +3,8 @@ import { requirePermission } from "~/auth/require-permission";
 import { dbOf } from "~/context";
 import { officeCounts } from "~/domain/trucks/office-counts";
 import { office } from "~/text/en/office";
+import { PageTitle } from "~/ui/page-frame";
 import type { Route } from "./+types/index";
-import { PageHead } from "./page-parts";
 
 export async function loader({ context }: Route.LoaderArgs) {
   const actor = requirePermission(context, "truck.manage");
@@ -47,7 +47,7 @@ export default function OfficeStart({ loaderData: { counts } }: Route.ComponentP
   ];
   return (
     <>
-      <PageHead title={office.title} lead={words.lead} />
+      <PageTitle title={office.title} lead={words.lead} />
       <ul className="divide-y divide-line border-y border-line">
         {parts.map(({ to, label, line, what }) => (
           <li key={to} className="grid gap-x-6 py-3 sm:grid-cols-[10rem_14rem_1fr]">

@@ -1,13 +1,16 @@
 import type { ReactNode } from "react";
-import { NavLink, Outlet } from "react-router";
-import { requirePermission } from "~/auth/require-permission";
+import { Form, NavLink, Outlet, useRouteLoaderData } from "react-router";
+import { requirePermission, requireSignedIn } from "~/auth/require-permission";
 import { office } from "~/text/en/office";
+import { uiText } from "~/text/en/ui";
+import { Button } from "~/ui/button";
+import { PageFrame } from "~/ui/page-frame";
 import type { Route } from "./+types/office-layout";
 import { OfficeError } from "./page-parts";
 
 export function loader({ context }: Route.LoaderArgs) {
-  requirePermission(context, "truck.manage");
-  return null;
+  const actor = requirePermission(context, "truck.manage");
+  return { name: actor.name, carrier: requireSignedIn(context).carrierName };
 }
 
 const PARTS = [
@@ -28,8 +31,16 @@ export default function OfficeLayout() {
 }
 
 function Frame({ children }: { children: ReactNode }) {
+  const person = useRouteLoaderData<typeof loader>("routes/office/office-layout");
   return (
-    <div className="mx-auto max-w-5xl px-4 pb-16">
+    <PageFrame
+      person={person && { ...person, to: "/account" }}
+      out={
+        <Form method="post" action="/sign-out">
+          <Button type="submit">{uiText.signOut}</Button>
+        </Form>
+      }
+    >
       <nav aria-label={office.sections} className="mb-6 border-b border-line print:hidden">
         <ul className="flex flex-wrap gap-x-6">
           {PARTS.map(({ to, label, end }) => (
@@ -37,7 +48,7 @@ function Frame({ children }: { children: ReactNode }) {
               <NavLink
                 to={to}
                 end={end}
-                className="inline-flex min-h-11 items-center border-b-4 border-transparent no-underline aria-[current=page]:border-enamel aria-[current=page]:font-bold"
+                className="inline-flex min-h-11 items-center border-b-4 border-transparent no-underline hover:border-line aria-[current=page]:border-enamel aria-[current=page]:font-bold"
               >
                 {label}
               </NavLink>
@@ -45,8 +56,8 @@ function Frame({ children }: { children: ReactNode }) {
           ))}
         </ul>
       </nav>
-      <main>{children}</main>
-    </div>
+      {children}
+    </PageFrame>
   );
 }
 

@@ -1,5 +1,6 @@
-import { office, standingWords } from "~/text/en/office";
+import { office } from "~/text/en/office";
 import type { StandingWord } from "~/trade/standing/standing";
+import { StandingGlyph } from "~/ui/standing-glyph";
 
 /** A truck's standing in one word; why it says nothing of walks when it is out of service. */
 export function StandingOf({
@@ -11,5 +12,5 @@ export function StandingOf({
 }) {
   if (!inService) return <span className="text-mute">{office.trucks.outOfService}</span>;
   if (standing === null) return <span className="text-mute">{office.trucks.workingOut}</span>;
-  return <span className="font-bold">{standingWords[standing]}</span>;
+  return <StandingGlyph word={standing} />;
 }

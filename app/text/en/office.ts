@@ -6,7 +6,6 @@ import type { FittingKind } from "../../trade/fittings";
 import type { Colour, Limit } from "../../trade/limits";
 import type { SetPointReading } from "../../trade/set-points";
 import type { Cadence, StationKey, UnitKind } from "../../trade/sheet/check";
-import type { StandingWord } from "../../trade/standing/standing";
 import { fromSi } from "../../trade/units";
 
 const number = new Intl.NumberFormat("en-US", { maximumSignificantDigits: 5 });
@@ -26,6 +25,22 @@ export function unitLabel(unit: string): string {
   return UNITS[unit] ?? unit;
 }
 
+interface UnitOption {
+  value: string;
+  label: string;
+}
+function unitOption(value: string): UnitOption {
+  return { value, label: unitLabel(value) };
+}
+
+/** Units as a form offers them, the usual one first. */
+export function unitOptions([usual, ...others]: readonly [string, ...string[]]): readonly [
+  UnitOption,
+  ...UnitOption[],
+] {
+  return [unitOption(usual), ...others.map(unitOption)];
+}
+
 /** "2026-05-20" as "May 20, 2026". */
 export function dayLabel(day: string): string {
   return new Intl.DateTimeFormat("en-US", {
@@ -39,14 +54,6 @@ export function dayLabel(day: string): string {
 export function plural(count: number, one: string, many: string): string {
   return `${number.format(count)} ${count === 1 ? one : many}`;
 }
-
-export const standingWords: Record<StandingWord, string> = {
-  held: "Held",
-  "walk-due": "Walk due",
-  limited: "Limited",
-  cleared: "Cleared",
-  out: "Out",
-};
 
 export const unitKinds: Record<UnitKind, string> = { powered: "Truck", towed: "Towed unit" };
 
@@ -293,7 +300,6 @@ export const office = {
   sections: "Parts of the office",
   save: "Save",
   cancel: "Cancel",
-  unitOf: (field: string) => `Unit of ${field.toLowerCase()}`,
   formFault: "Some of this needs another look. What you typed is still here.",
   choose: "Choose",
   notFound: {

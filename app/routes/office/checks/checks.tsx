@@ -8,11 +8,16 @@ import { addOwnCheck, ownCheckSchema } from "~/domain/own-checks/add-own-check";
 import { listOwnChecks, type OwnCheckRow } from "~/domain/own-checks/read-own-checks";
 import { removeOwnCheck, restoreOwnCheck } from "~/domain/own-checks/remove-own-check";
 import { listTrucks } from "~/domain/trucks/list-trucks";
+import { unparsedForm } from "~/http/form-reply";
 import { cadences, colours, office, stations } from "~/text/en/office";
 import { CADENCES, STATIONS } from "~/trade/sheet/check";
-import { ActionButton, HiddenField, OfficeForm, SelectField, TextField } from "../fields";
-import { idOr404, notFound, refusedForm, unparsed } from "../office-reply";
-import { Empty, PageHead, SavedNote } from "../page-parts";
+import { EmptyState } from "~/ui/empty-state";
+import { SelectField } from "~/ui/fields/select-field";
+import { TextField } from "~/ui/fields/text-field";
+import { PageTitle } from "~/ui/page-frame";
+import { ActionButton, HiddenField, OfficeForm } from "../office-form";
+import { idOr404, notFound, refusedForm } from "../office-reply";
+import { SavedNote } from "../page-parts";
 import type { Route } from "./+types/checks";
 
 export async function loader({ context }: Route.LoaderArgs) {
@@ -43,7 +48,7 @@ export async function action({ context, request }: Route.ActionArgs) {
     throw redirect(`/office/checks?done=check-${intent}d`);
   }
   const submission = parseWithZod(form, { schema: ownCheckSchema });
-  if (submission.status !== "success") return unparsed(submission);
+  if (submission.status !== "success") return unparsedForm(submission);
   const added = await addOwnCheck(db, actor, submission.value);
   if (!added.ok) return refusedForm(submission, added.refusal);
   throw redirect("/office/checks?done=check");
@@ -54,10 +59,10 @@ export default function OwnChecks({ loaderData, actionData }: Route.ComponentPro
   const { id, asked, takenOff, trucks } = loaderData;
   return (
     <>
-      <PageHead title={words.title} lead={words.what} />
+      <PageTitle title={words.title} lead={words.what} />
       <SavedNote />
       {asked.length === 0 ? (
-        <Empty>{words.none}</Empty>
+        <EmptyState title={words.none} />
       ) : (
         <List rows={asked} intent="remove" action={words.remove} actionOf={words.removeOf} />
       )}
@@ -133,8 +138,8 @@ function AddCheck({
   return (
     <OfficeForm form={form} submit={words.submit}>
       <HiddenField field={fields.id} />
-      <TextField field={fields.label} label={words.label} hint={words.labelHint} maxLength={80} />
-      <TextField field={fields.good} label={words.good} hint={words.goodHint} maxLength={160} />
+      <TextField field={fields.label} label={words.label} hint={words.labelHint} />
+      <TextField field={fields.good} label={words.good} hint={words.goodHint} />
       <SelectField
         field={fields.station}
         label={words.station}

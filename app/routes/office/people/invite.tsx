@@ -7,11 +7,14 @@ import { dbOf } from "~/context";
 import { invitePerson } from "~/domain/people/invite-person";
 import { inviteSchema } from "~/domain/people/person-input";
 import { listYards } from "~/domain/yards/read-yards";
+import { unparsedForm } from "~/http/form-reply";
 import { office } from "~/text/en/office";
 import { peopleText } from "~/text/en/people";
-import { OfficeForm, TextField } from "../fields";
-import { refusedForm, unparsed } from "../office-reply";
-import { PageHead, TextLink } from "../page-parts";
+import { TextField } from "~/ui/fields/text-field";
+import { PageTitle } from "~/ui/page-frame";
+import { OfficeForm } from "../office-form";
+import { refusedForm } from "../office-reply";
+import { TextLink } from "../page-parts";
 import type { Route } from "./+types/invite";
 import { PlaceFields, type ShownPlace } from "./place-fields";
 
@@ -25,7 +28,7 @@ export async function loader({ context }: Route.LoaderArgs) {
 export async function action({ context, request }: Route.ActionArgs) {
   const actor = requirePermission(context, "people.manage");
   const submission = parseWithZod(await request.formData(), { schema: inviteSchema });
-  if (submission.status !== "success") return unparsed(submission);
+  if (submission.status !== "success") return unparsedForm(submission);
   const invited = await invitePerson(dbOf(context), actor, submission.value);
   if (!invited.ok) return refusedForm(submission, invited.refusal);
   return redirect("/office/people?done=invited");
@@ -42,25 +45,19 @@ export default function Invite({ loaderData, actionData }: Route.ComponentProps)
   const { key, ...id } = getInputProps(fields.id, { type: "hidden" });
   return (
     <>
-      <PageHead title={peopleText.inviteTitle} lead={peopleText.inviteLead} />
+      <PageTitle title={peopleText.inviteTitle} lead={peopleText.inviteLead} />
       <OfficeForm
         form={form}
         submit={peopleText.send}
         cancelTo={<TextLink to="/office/people">{office.cancel}</TextLink>}
       >
         <input key={key} {...id} />
-        <TextField
-          field={fields.name}
-          label={peopleText.name}
-          hint={peopleText.nameHint}
-          maxLength={80}
-        />
+        <TextField field={fields.name} label={peopleText.name} hint={peopleText.nameHint} />
         <TextField
           field={fields.email}
           label={peopleText.email}
           hint={peopleText.emailHint}
           inputMode="email"
-          maxLength={254}
         />
         <PlaceFields fields={fields} yards={loaderData.yards} />
       </OfficeForm>

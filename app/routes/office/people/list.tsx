@@ -5,13 +5,17 @@ import { requirePermission } from "~/auth/require-permission";
 import { dbOf } from "~/context";
 import { listPeople, type Member, type OpenInvitation } from "~/domain/people/list-people";
 import { revokeInvitation } from "~/domain/people/revoke-invitation";
+import { unparsedForm } from "~/http/form-reply";
 import { systemClock } from "~/services/clock";
 import { office } from "~/text/en/office";
 import { peopleText } from "~/text/en/people";
 import { roleText } from "~/text/en/roles";
-import { ActionButton } from "../fields";
-import { refusedForm, unparsed } from "../office-reply";
-import { Empty, MainLink, PageHead, SavedNote } from "../page-parts";
+import { ButtonLink } from "~/ui/button";
+import { EmptyState } from "~/ui/empty-state";
+import { PageTitle } from "~/ui/page-frame";
+import { ActionButton } from "../office-form";
+import { refusedForm } from "../office-reply";
+import { SavedNote } from "../page-parts";
 import type { Route } from "./+types/list";
 
 const schema = z.object({ intent: z.literal("take-back"), invitationId: z.uuid() });
@@ -30,7 +34,7 @@ export async function loader({ context }: Route.LoaderArgs) {
 export async function action({ context, request }: Route.ActionArgs) {
   const actor = requirePermission(context, "people.manage");
   const submission = parseWithZod(await request.formData(), { schema });
-  if (submission.status !== "success") return unparsed(submission);
+  if (submission.status !== "success") return unparsedForm(submission);
   const done = await revokeInvitation(dbOf(context), actor, submission.value);
   if (!done.ok) return refusedForm(submission, done.refusal);
   return redirect("/office/people?done=invitation-revoked");
@@ -41,9 +45,11 @@ export default function People({ loaderData, actionData }: Route.ComponentProps)
   const faults = actionData?.result.error?.[""] ?? [];
   return (
     <>
-      <PageHead title={peopleText.title} lead={peopleText.lead}>
-        <MainLink to="/office/people/invite">{peopleText.invite}</MainLink>
-      </PageHead>
+      <PageTitle title={peopleText.title} lead={peopleText.lead}>
+        <ButtonLink kind="main" to="/office/people/invite">
+          {peopleText.invite}
+        </ButtonLink>
+      </PageTitle>
       <SavedNote />
       {faults.map((words) => (
         <p key={words} role="alert" className="mb-6 border-l-4 border-red bg-card p-3">
@@ -52,7 +58,7 @@ export default function People({ loaderData, actionData }: Route.ComponentProps)
       ))}
       <OnCall line={onCall} />
       <Section title={peopleText.working}>
-        {active.length === 1 && invitations.length === 0 && <Empty>{peopleText.none}</Empty>}
+        {active.length === 1 && invitations.length === 0 && <EmptyState title={peopleText.none} />}
         <MemberRows members={active} self={self} />
       </Section>
       {invitations.length > 0 && (
@@ -85,7 +91,7 @@ function OnCall({ line }: { line: Member[] }) {
   return (
     <Section title={peopleText.onCallTitle}>
       {line.length === 0 ? (
-        <Empty>{peopleText.onCallNone}</Empty>
+        <EmptyState title={peopleText.onCallNone} />
       ) : (
         <>
           <p className="mb-2 text-mute">{peopleText.onCallLead}</p>

@@ -5,12 +5,15 @@ import { requirePermission } from "~/auth/require-permission";
 import { dbOf } from "~/context";
 import { listPeople, readMember } from "~/domain/people/list-people";
 import { listYards } from "~/domain/yards/read-yards";
+import { unparsedForm } from "~/http/form-reply";
 import { systemClock } from "~/services/clock";
 import { office } from "~/text/en/office";
 import { peopleText } from "~/text/en/people";
-import { ActionButton, OfficeForm, SelectField } from "../fields";
-import { idOr404, notFound, refusedForm, unparsed } from "../office-reply";
-import { PageHead, TextLink } from "../page-parts";
+import { SelectField } from "~/ui/fields/select-field";
+import { PageTitle } from "~/ui/page-frame";
+import { ActionButton, OfficeForm } from "../office-form";
+import { idOr404, notFound, refusedForm } from "../office-reply";
+import { TextLink } from "../page-parts";
 import type { Route } from "./+types/person";
 import { personIntents, runPersonIntent } from "./person-commands";
 import { PlaceFields, type ShownPlace } from "./place-fields";
@@ -32,7 +35,7 @@ export async function action({ context, params, request }: Route.ActionArgs) {
   const form = await request.formData();
   form.set("personId", idOr404(params.personId));
   const submission = parseWithZod(form, { schema: personIntents });
-  if (submission.status !== "success") return unparsed(submission);
+  if (submission.status !== "success") return unparsedForm(submission);
   const { done, note } = await runPersonIntent(dbOf(context), actor, submission.value);
   if (!done.ok) return refusedForm(submission, done.refusal);
   return redirect(`/office/people?done=${note}`);
@@ -47,7 +50,7 @@ export default function Person({ loaderData, actionData }: Route.ComponentProps)
   const faults = ofForm ? [] : (result?.error?.[""] ?? []);
   return (
     <>
-      <PageHead title={member.name} lead={`${member.email} · ${peopleText.phone(member.phone)}`} />
+      <PageTitle title={member.name} lead={`${member.email} · ${peopleText.phone(member.phone)}`} />
       {faults.map((words) => (
         <p key={words} role="alert" className="mb-6 border-l-4 border-red bg-card p-3">
           {words}

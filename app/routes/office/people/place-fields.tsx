@@ -3,7 +3,8 @@ import { ROLES, type Role } from "~/domain/actor";
 import { peopleText } from "~/text/en/people";
 import { refusalText } from "~/text/en/refusals";
 import { roleText } from "~/text/en/roles";
-import { CheckField, SelectField } from "../fields";
+import { CheckField } from "~/ui/fields/check-field";
+import { SelectField } from "~/ui/fields/select-field";
 
 /** A person's place as its form shows it. */
 export type ShownPlace = {

@@ -6,11 +6,16 @@ import { dbOf } from "~/context";
 import { changePolicy } from "~/domain/policy/change-policy";
 import { readPolicy } from "~/domain/policy/read-policy";
 import type { PolicySettings } from "~/domain/policy/settings";
+import { unparsedForm } from "~/http/form-reply";
 import { office } from "~/text/en/office";
 import { policyText, settingText } from "~/text/en/policy";
-import { CheckField, OfficeForm, SelectField, TextField } from "../fields";
-import { refusedForm, unparsed } from "../office-reply";
-import { PageHead, SavedNote } from "../page-parts";
+import { CheckField } from "~/ui/fields/check-field";
+import { SelectField } from "~/ui/fields/select-field";
+import { TextField } from "~/ui/fields/text-field";
+import { PageTitle } from "~/ui/page-frame";
+import { OfficeForm } from "../office-form";
+import { refusedForm } from "../office-reply";
+import { SavedNote } from "../page-parts";
 import type { Route } from "./+types/policy";
 import { type NumberSetting, numberFault, policyForm } from "./policy-form";
 
@@ -26,7 +31,7 @@ export async function action({ context, request }: Route.ActionArgs) {
     formatError: (issues: { path: PropertyKey[] }[]) =>
       issues.map((issue) => numberFault(String(issue.path[0]))),
   });
-  if (submission.status !== "success") return unparsed(submission);
+  if (submission.status !== "success") return unparsedForm(submission);
   const changed = await changePolicy(dbOf(context), actor, submission.value);
   if (!changed.ok) return refusedForm(submission, changed.refusal);
   return redirect("/office/policy?done=policy");
@@ -54,7 +59,7 @@ export default function Policy({ loaderData, actionData }: Route.ComponentProps)
   const { groups } = policyText;
   return (
     <>
-      <PageHead title={policyText.title} lead={policyText.lead} />
+      <PageTitle title={policyText.title} lead={policyText.lead} />
       <SavedNote />
       <p className="max-w-prose">{policyText.floor}</p>
       <p className="mt-2 mb-8 text-mute">{policyText.version(loaderData.version)}</p>
@@ -103,7 +108,7 @@ function Group({ title, children }: { title: string; children: React.ReactNode }
 }
 
 function NumberField({ name, field }: { name: NumberSetting; field: FieldMetadata<unknown> }) {
-  return <TextField field={field} {...settingText[name]} inputMode="numeric" maxLength={4} />;
+  return <TextField field={field} {...settingText[name]} inputMode="numeric" />;
 }
 
 export const meta: Route.MetaFunction = () => [

@@ -5,11 +5,13 @@ import { requirePermission } from "~/auth/require-permission";
 import { dbOf } from "~/context";
 import { addFitting, addFittingSchema } from "~/domain/trucks/add-fitting";
 import { mayCarrySeveral } from "~/domain/trucks/fitting-fields";
+import { unparsedForm } from "~/http/form-reply";
 import { fittingGroups, fittingKinds, office } from "~/text/en/office";
 import { FITTING_KINDS, type FittingKind } from "~/trade/fittings";
-import { SubmitButton } from "../fields";
-import { refusedForm, unparsed } from "../office-reply";
-import { PageHead, TextLink } from "../page-parts";
+import { Button } from "~/ui/button";
+import { PageTitle } from "~/ui/page-frame";
+import { refusedForm } from "../office-reply";
+import { TextLink } from "../page-parts";
 import type { Route } from "./+types/add-fitting";
 import { FittingForm } from "./fitting-form";
 import { truckOr404 } from "./truck-or-404";
@@ -36,7 +38,7 @@ export async function action({ context, params, request }: Route.ActionArgs) {
   const db = dbOf(context);
   const { truck } = await truckOr404(db, actor, params.unit);
   const submission = parseWithZod(await request.formData(), { schema: addFittingSchema });
-  if (submission.status !== "success") return unparsed(submission);
+  if (submission.status !== "success") return unparsedForm(submission);
   const added = await addFitting(db, actor, { ...submission.value, truckId: truck.id });
   if (!added.ok) return refusedForm(submission, added.refusal);
   throw redirect(`/office/trucks/${truck.unitNumber}?done=fitting`);
@@ -48,14 +50,14 @@ export default function AddFitting({ loaderData, actionData }: Route.ComponentPr
   if (kind === null) {
     return (
       <>
-        <PageHead title={office.truck.addFittingTo(unitNumber)} />
+        <PageTitle title={office.truck.addFittingTo(unitNumber)} />
         <ChooseKind free={free} back={back} />
       </>
     );
   }
   return (
     <>
-      <PageHead
+      <PageTitle
         title={office.truck.fittingTitle(unitNumber, fittingKinds[kind])}
         lead={office.truck.endsWalks}
       />
@@ -99,7 +101,9 @@ function ChooseKind({ free, back }: { free: readonly FittingKind[]; back: string
         </select>
       </div>
       <div className="flex flex-wrap items-center gap-4">
-        <SubmitButton>{office.truck.next}</SubmitButton>
+        <Button type="submit" kind="main">
+          {office.truck.next}
+        </Button>
         <TextLink to={back}>{office.cancel}</TextLink>
       </div>
     </Form>

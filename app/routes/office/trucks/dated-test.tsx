@@ -4,10 +4,13 @@ import { redirect } from "react-router";
 import { requirePermission } from "~/auth/require-permission";
 import { dbOf } from "~/context";
 import { datedTestSchema, recordDatedTest } from "~/domain/trucks/record-dated-test";
+import { unparsedForm } from "~/http/form-reply";
 import { office, testLabel } from "~/text/en/office";
-import { OfficeForm, TextField } from "../fields";
-import { notFound, refusedForm, unparsed } from "../office-reply";
-import { PageHead, TextLink } from "../page-parts";
+import { TextField } from "~/ui/fields/text-field";
+import { PageTitle } from "~/ui/page-frame";
+import { OfficeForm } from "../office-form";
+import { notFound, refusedForm } from "../office-reply";
+import { TextLink } from "../page-parts";
 import type { Route } from "./+types/dated-test";
 import { truckOr404 } from "./truck-or-404";
 
@@ -26,7 +29,7 @@ export async function action({ context, params, request }: Route.ActionArgs) {
   const form = await request.formData();
   form.set("kind", params.test);
   const submission = parseWithZod(form, { schema: datedTestSchema });
-  if (submission.status !== "success") return unparsed(submission);
+  if (submission.status !== "success") return unparsedForm(submission);
   const recorded = await recordDatedTest(db, actor, { ...submission.value, truckId: truck.id });
   if (!recorded.ok) return refusedForm(submission, recorded.refusal);
   throw redirect(`/office/trucks/${truck.unitNumber}?done=test#tests`);
@@ -41,7 +44,7 @@ export default function RecordTest({ loaderData, actionData }: Route.ComponentPr
   });
   return (
     <>
-      <PageHead
+      <PageTitle
         title={words.testTitle(unitNumber, testLabel(test))}
         lead={everyMonths === null ? words.permitLead : words.everyLine(everyMonths, source)}
       />
@@ -64,7 +67,7 @@ export default function RecordTest({ loaderData, actionData }: Route.ComponentPr
           label={words.dueOn}
           hint={everyMonths === null ? words.permitDueHint : words.dueOnHint}
         />
-        <TextField field={fields.note} label={words.note} hint={words.noteHint} maxLength={200} />
+        <TextField field={fields.note} label={words.note} hint={words.noteHint} />
       </OfficeForm>
     </>
   );

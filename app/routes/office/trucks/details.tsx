@@ -4,11 +4,15 @@ import { redirect } from "react-router";
 import { requirePermission } from "~/auth/require-permission";
 import { dbOf } from "~/context";
 import { changeTruckDetails, truckDetailsSchema } from "~/domain/trucks/change-truck-details";
+import { unparsedForm } from "~/http/form-reply";
 import { office, unitKinds } from "~/text/en/office";
 import { UNIT_KINDS } from "~/trade/sheet/check";
-import { OfficeForm, SelectField, TextField } from "../fields";
-import { refusedForm, unparsed } from "../office-reply";
-import { PageHead, TextLink } from "../page-parts";
+import { SelectField } from "~/ui/fields/select-field";
+import { TextField } from "~/ui/fields/text-field";
+import { PageTitle } from "~/ui/page-frame";
+import { OfficeForm } from "../office-form";
+import { refusedForm } from "../office-reply";
+import { TextLink } from "../page-parts";
 import type { Route } from "./+types/details";
 import { truckOr404 } from "./truck-or-404";
 
@@ -23,7 +27,7 @@ export async function action({ context, params, request }: Route.ActionArgs) {
   const db = dbOf(context);
   const { truck } = await truckOr404(db, actor, params.unit);
   const submission = parseWithZod(await request.formData(), { schema: truckDetailsSchema });
-  if (submission.status !== "success") return unparsed(submission);
+  if (submission.status !== "success") return unparsedForm(submission);
   const changed = await changeTruckDetails(db, actor, { ...submission.value, truckId: truck.id });
   if (!changed.ok) return refusedForm(submission, changed.refusal);
   throw redirect(`/office/trucks/${changed.value.unitNumber}?done=details`);
@@ -39,25 +43,20 @@ export default function TruckDetails({ loaderData, actionData }: Route.Component
   });
   return (
     <>
-      <PageHead title={office.truck.detailsTitle(unitNumber)} />
+      <PageTitle title={office.truck.detailsTitle(unitNumber)} />
       <OfficeForm
         form={form}
         submit={office.truck.saveDetails}
         cancelTo={<TextLink to={`/office/trucks/${unitNumber}`}>{office.cancel}</TextLink>}
       >
-        <TextField
-          field={fields.unitNumber}
-          label={words.unit}
-          hint={words.unitHint}
-          maxLength={40}
-        />
+        <TextField field={fields.unitNumber} label={words.unit} hint={words.unitHint} />
         <SelectField
           field={fields.kind}
           label={words.kind}
           hint={office.truck.kindHint}
           options={UNIT_KINDS.map((one) => ({ value: one, label: unitKinds[one] }))}
         />
-        <TextField field={fields.vin} label={words.vin} hint={words.vinHint} maxLength={40} />
+        <TextField field={fields.vin} label={words.vin} hint={words.vinHint} />
       </OfficeForm>
     </>
   );

@@ -13,17 +13,14 @@ import {
   flagNames,
   office,
   optionLabel,
-  unitLabel,
+  unitOptions,
 } from "~/text/en/office";
 import type { FittingKind } from "~/trade/fittings";
-import {
-  AmountField,
-  CheckField,
-  HiddenField,
-  OfficeForm,
-  SelectField,
-  TextField,
-} from "../fields";
+import { AmountField } from "~/ui/fields/amount-field";
+import { CheckField } from "~/ui/fields/check-field";
+import { SelectField } from "~/ui/fields/select-field";
+import { TextField } from "~/ui/fields/text-field";
+import { HiddenField, OfficeForm } from "../office-form";
 
 interface Amount {
   value: string | number | undefined;
@@ -108,7 +105,7 @@ function PlateField({
         <AmountField
           field={value}
           unit={unit}
-          units={field.units.map((one) => ({ value: one, label: unitLabel(one) }))}
+          units={unitOptions(field.units)}
           label={amountNames[field.name]}
           hint={amountHint(kind, field.name)}
         />

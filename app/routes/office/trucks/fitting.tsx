@@ -3,9 +3,11 @@ import { redirect } from "react-router";
 import { requirePermission } from "~/auth/require-permission";
 import { dbOf } from "~/context";
 import { changeFitting, changeFittingSchema } from "~/domain/trucks/change-fitting";
+import { unparsedForm } from "~/http/form-reply";
 import { fittingKinds, office } from "~/text/en/office";
-import { idOr404, notFound, refusedForm, unparsed } from "../office-reply";
-import { PageHead, TextLink } from "../page-parts";
+import { PageTitle } from "~/ui/page-frame";
+import { idOr404, notFound, refusedForm } from "../office-reply";
+import { TextLink } from "../page-parts";
 import type { Route } from "./+types/fitting";
 import { FittingForm } from "./fitting-form";
 import { shownPlate } from "./shown-plate";
@@ -25,7 +27,7 @@ export async function action({ context, params, request }: Route.ActionArgs) {
   const { truck } = await truckOr404(db, actor, params.unit);
   const fittingId = idOr404(params.fittingId);
   const submission = parseWithZod(await request.formData(), { schema: changeFittingSchema });
-  if (submission.status !== "success") return unparsed(submission);
+  if (submission.status !== "success") return unparsedForm(submission);
   const input = { ...submission.value, truckId: truck.id, fittingId };
   const changed = await changeFitting(db, actor, input);
   if (!changed.ok) return refusedForm(submission, changed.refusal);
@@ -38,7 +40,10 @@ export default function ChangeFitting({ loaderData, actionData }: Route.Componen
   const words = office.truck;
   return (
     <>
-      <PageHead title={words.fittingTitle(unitNumber, fittingKinds[kind])} lead={words.endsWalks} />
+      <PageTitle
+        title={words.fittingTitle(unitNumber, fittingKinds[kind])}
+        lead={words.endsWalks}
+      />
       <FittingForm
         kind={kind}
         plate={plate}

@@ -4,7 +4,11 @@ import { dbOf } from "~/context";
 import { listTrucks } from "~/domain/trucks/list-trucks";
 import { listYards } from "~/domain/yards/read-yards";
 import { office, unitKinds } from "~/text/en/office";
-import { Empty, MainLink, PageHead, SavedNote, TextLink } from "../page-parts";
+import { ButtonLink } from "~/ui/button";
+import { EmptyState } from "~/ui/empty-state";
+import { PageTitle } from "~/ui/page-frame";
+import { Table } from "~/ui/table";
+import { SavedNote } from "../page-parts";
 import { StandingOf } from "../standing-of";
 import type { Route } from "./+types/list";
 
@@ -22,54 +26,50 @@ export default function Trucks({ loaderData: { trucks, hasYard } }: Route.Compon
   const { columns } = words;
   return (
     <>
-      <PageHead title={words.title}>
-        {hasYard && <MainLink to="/office/trucks/new">{words.add}</MainLink>}
-      </PageHead>
+      <PageTitle title={words.title}>
+        {hasYard && (
+          <ButtonLink kind="main" to="/office/trucks/new">
+            {words.add}
+          </ButtonLink>
+        )}
+      </PageTitle>
       <SavedNote />
       {!hasYard && (
-        <Empty>
-          {words.noYard} <TextLink to="/office/yards/new">{office.yards.add}</TextLink>
-        </Empty>
+        <EmptyState
+          title={words.noYard}
+          action={<ButtonLink to="/office/yards/new">{office.yards.add}</ButtonLink>}
+        />
       )}
-      {hasYard && trucks.length === 0 && <Empty>{words.none}</Empty>}
+      {hasYard && trucks.length === 0 && <EmptyState title={words.none} />}
       {trucks.length > 0 && (
-        <table className="w-full border-y border-line text-left">
-          <thead>
-            <tr className="border-b border-line text-base text-mute">
-              <th scope="col" className="py-2 pr-4">
-                {columns.unit}
-              </th>
-              <th scope="col" className="hidden py-2 pr-4 sm:table-cell">
-                {columns.kind}
-              </th>
-              <th scope="col" className="py-2 pr-4">
-                {columns.yard}
-              </th>
-              <th scope="col" className="py-2">
-                {columns.standing}
-              </th>
-            </tr>
-          </thead>
-          <tbody className="divide-y divide-line">
-            {trucks.map((truck) => (
-              <tr key={truck.id}>
-                <th scope="row" className="py-1 pr-4 font-normal">
-                  <Link
-                    to={`/office/trucks/${truck.unitNumber}`}
-                    className="inline-flex min-h-11 items-center font-stencil text-xl text-enamel underline"
-                  >
-                    {truck.unitNumber}
-                  </Link>
-                </th>
-                <td className="hidden py-1 pr-4 sm:table-cell">{unitKinds[truck.kind]}</td>
-                <td className="py-1 pr-4">{truck.yardName}</td>
-                <td className="py-1">
-                  <StandingOf standing={truck.standing} inService={truck.inService} />
-                </td>
-              </tr>
-            ))}
-          </tbody>
-        </table>
+        <Table
+          caption={words.title}
+          captionHidden
+          rows={trucks}
+          rowKey={(truck) => truck.id}
+          columns={[
+            {
+              key: "unit",
+              head: columns.unit,
+              rowHead: true,
+              cell: ({ unitNumber }) => (
+                <Link
+                  to={`/office/trucks/${unitNumber}`}
+                  className="inline-flex min-h-11 items-center font-stencil text-xl font-normal text-enamel underline"
+                >
+                  {unitNumber}
+                </Link>
+              ),
+            },
+            { key: "kind", head: columns.kind, cell: ({ kind }) => unitKinds[kind] },
+            { key: "yard", head: columns.yard, cell: ({ yardName }) => yardName },
+            {
+              key: "standing",
+              head: columns.standing,
+              cell: (truck) => <StandingOf standing={truck.standing} inService={truck.inService} />,
+            },
+          ]}
+        />
       )}
     </>
   );

@@ -5,10 +5,13 @@ import { requirePermission } from "~/auth/require-permission";
 import { dbOf } from "~/context";
 import { moveTruckSchema, moveTruckToYard } from "~/domain/trucks/move-truck";
 import { listYards } from "~/domain/yards/read-yards";
+import { unparsedForm } from "~/http/form-reply";
 import { office } from "~/text/en/office";
-import { OfficeForm, SelectField } from "../fields";
-import { refusedForm, unparsed } from "../office-reply";
-import { PageHead, TextLink } from "../page-parts";
+import { SelectField } from "~/ui/fields/select-field";
+import { PageTitle } from "~/ui/page-frame";
+import { OfficeForm } from "../office-form";
+import { refusedForm } from "../office-reply";
+import { TextLink } from "../page-parts";
 import type { Route } from "./+types/move";
 import { truckOr404 } from "./truck-or-404";
 
@@ -29,7 +32,7 @@ export async function action({ context, params, request }: Route.ActionArgs) {
   const db = dbOf(context);
   const { truck } = await truckOr404(db, actor, params.unit);
   const submission = parseWithZod(await request.formData(), { schema: moveTruckSchema });
-  if (submission.status !== "success") return unparsed(submission);
+  if (submission.status !== "success") return unparsedForm(submission);
   const moved = await moveTruckToYard(db, actor, { ...submission.value, truckId: truck.id });
   if (!moved.ok) return refusedForm(submission, moved.refusal);
   const done = moved.value.moved ? "moved" : "unchanged";
@@ -45,7 +48,7 @@ export default function MoveTruck({ loaderData, actionData }: Route.ComponentPro
   });
   return (
     <>
-      <PageHead title={office.truck.moveTitle(unitNumber)} />
+      <PageTitle title={office.truck.moveTitle(unitNumber)} />
       <OfficeForm
         form={form}
         submit={office.truck.moveSubmit}

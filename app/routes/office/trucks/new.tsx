@@ -7,11 +7,15 @@ import { dbOf } from "~/context";
 import { addTruck, addTruckSchema } from "~/domain/trucks/add-truck";
 import { USUAL_TRUCKS } from "~/domain/trucks/usual-trucks";
 import { listYards } from "~/domain/yards/read-yards";
+import { unparsedForm } from "~/http/form-reply";
 import { office, unitKinds, usualTrucks } from "~/text/en/office";
 import { UNIT_KINDS } from "~/trade/sheet/check";
-import { HiddenField, OfficeForm, SelectField, TextField } from "../fields";
-import { refusedForm, unparsed } from "../office-reply";
-import { PageHead, TextLink } from "../page-parts";
+import { SelectField } from "~/ui/fields/select-field";
+import { TextField } from "~/ui/fields/text-field";
+import { PageTitle } from "~/ui/page-frame";
+import { HiddenField, OfficeForm } from "../office-form";
+import { refusedForm } from "../office-reply";
+import { TextLink } from "../page-parts";
 import type { Route } from "./+types/new";
 
 export async function loader({ context }: Route.LoaderArgs) {
@@ -26,7 +30,7 @@ export async function loader({ context }: Route.LoaderArgs) {
 export async function action({ context, request }: Route.ActionArgs) {
   const actor = requirePermission(context, "truck.manage");
   const submission = parseWithZod(await request.formData(), { schema: addTruckSchema });
-  if (submission.status !== "success") return unparsed(submission);
+  if (submission.status !== "success") return unparsedForm(submission);
   const added = await addTruck(dbOf(context), actor, submission.value);
   if (!added.ok) return refusedForm(submission, added.refusal);
   throw redirect(`/office/trucks/${added.value.unitNumber}?done=truck`);
@@ -55,19 +59,14 @@ export default function NewTruck({ loaderData: { id, yards }, actionData }: Rout
   });
   return (
     <>
-      <PageHead title={words.add} />
+      <PageTitle title={words.add} />
       <OfficeForm
         form={form}
         submit={words.submit}
         cancelTo={<TextLink to="/office/trucks">{office.cancel}</TextLink>}
       >
         <HiddenField field={fields.id} />
-        <TextField
-          field={fields.unitNumber}
-          label={words.unit}
-          hint={words.unitHint}
-          maxLength={40}
-        />
+        <TextField field={fields.unitNumber} label={words.unit} hint={words.unitHint} />
         <SelectField
           field={fields.kind}
           label={words.kind}
@@ -87,7 +86,7 @@ export default function NewTruck({ loaderData: { id, yards }, actionData }: Rout
             { value: "", label: words.startNothing },
           ]}
         />
-        <TextField field={fields.vin} label={words.vin} hint={words.vinHint} maxLength={40} />
+        <TextField field={fields.vin} label={words.vin} hint={words.vinHint} />
       </OfficeForm>
     </>
   );

@@ -5,12 +5,16 @@ import { requirePermission } from "~/auth/require-permission";
 import { dbOf } from "~/context";
 import { figures } from "~/domain/trucks/fitting-attributes";
 import { setSetPoint, setSetPointSchema } from "~/domain/trucks/set-set-point";
+import { unparsedForm } from "~/http/form-reply";
 import { limitedBy, office, readings, unitLabel, withUnit } from "~/text/en/office";
 import { isSetPointReading, SET_POINT_READINGS } from "~/trade/set-points";
 import { fromSi, unitsOf } from "~/trade/units";
-import { OfficeForm, SelectField, TextField } from "../fields";
-import { notFound, refusedForm, unparsed } from "../office-reply";
-import { PageHead, TextLink } from "../page-parts";
+import { SelectField } from "~/ui/fields/select-field";
+import { TextField } from "~/ui/fields/text-field";
+import { PageTitle } from "~/ui/page-frame";
+import { OfficeForm } from "../office-form";
+import { notFound, refusedForm } from "../office-reply";
+import { TextLink } from "../page-parts";
 import type { Route } from "./+types/set-point";
 import { truckOr404 } from "./truck-or-404";
 
@@ -36,7 +40,7 @@ export async function action({ context, params, request }: Route.ActionArgs) {
   const form = await request.formData();
   form.set("reading", params.reading);
   const submission = parseWithZod(form, { schema: setSetPointSchema });
-  if (submission.status !== "success") return unparsed(submission);
+  if (submission.status !== "success") return unparsedForm(submission);
   const set = await setSetPoint(db, actor, { ...submission.value, truckId: truck.id });
   if (!set.ok) return refusedForm(submission, set.refusal);
   const done = set.value.changed ? "set-point" : "unchanged";
@@ -63,7 +67,7 @@ export default function SetPoint({ loaderData, actionData }: Route.ComponentProp
   });
   return (
     <>
-      <PageHead
+      <PageTitle
         title={words.setPointTitle(unitNumber, label)}
         lead={
           <>

@@ -6,8 +6,11 @@ import { cautions } from "~/text/en/cautions";
 import { office, readings } from "~/text/en/office";
 import { isSetPointReading } from "~/trade/set-points";
 import type { CautionKey } from "~/trade/sheet/cautions";
+import { Notice } from "~/ui/notice";
+import { PageTitle } from "~/ui/page-frame";
+import { TagDrawing } from "~/ui/tag-glyph";
 import { notFound } from "../office-reply";
-import { PageHead, TextLink } from "../page-parts";
+import { TextLink } from "../page-parts";
 import type { Route } from "./+types/sheet";
 import { type ProblemLine, type SheetView, sheetView } from "./sheet-view";
 import { truckOr404 } from "./truck-or-404";
@@ -27,9 +30,9 @@ export default function TruckSheet({ loaderData: { unitNumber, view } }: Route.C
   const back = `/office/trucks/${unitNumber}`;
   return (
     <>
-      <PageHead title={words.title(unitNumber)} lead={words.what}>
+      <PageTitle title={words.title(unitNumber)} lead={words.what}>
         <TextLink to={back}>{words.back(unitNumber)}</TextLink>
-      </PageHead>
+      </PageTitle>
       <Counts view={view} back={back} />
       {view.stations.map((station, index) => (
         <section
@@ -77,8 +80,7 @@ function Counts({ view, back }: { view: SheetView; back: string }) {
         </ul>
       </div>
       {view.missingSetPoints.length > 0 && (
-        <div className="border-l-4 border-blue bg-card p-3">
-          <p className="font-bold">{words.missing}</p>
+        <Notice tone="must" title={words.missing}>
           <ul className="list-disc pl-6">
             {view.missingSetPoints.map((reading) => (
               <li key={reading}>
@@ -92,7 +94,7 @@ function Counts({ view, back }: { view: SheetView; back: string }) {
               </li>
             ))}
           </ul>
-        </div>
+        </Notice>
       )}
       {view.cannot.length > 0 && (
         <p>
@@ -134,18 +136,11 @@ function CheckOnSheet({ check }: { check: SheetView["stations"][number]["checks"
   );
 }
 
-const TAG = {
-  red: "border-red bg-red text-card",
-  yellow: "border-yellow bg-yellow text-black",
-  white: "border-mute bg-card text-ink",
-} as const;
-
 function Problems({ line }: { line: ProblemLine }) {
   return (
     <li className="flex items-baseline gap-3">
-      <span
-        className={`w-20 shrink-0 border px-2 text-center text-base font-bold print:w-14 print:bg-white print:text-[10px] print:text-black ${TAG[line.colour]}`}
-      >
+      <span className="inline-flex w-28 shrink-0 items-center gap-2 font-bold print:w-20">
+        <TagDrawing colour={line.colour} />
         {line.word}
       </span>
       <span>

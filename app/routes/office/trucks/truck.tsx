@@ -5,9 +5,13 @@ import { dbOf } from "~/context";
 import { type FieldFault, REFUSAL_STATUS } from "~/domain/refusals";
 import { fittingKinds, office, unitKinds, vinWarnings } from "~/text/en/office";
 import { refusalText } from "~/text/en/refusals";
-import { ActionButton, ConfirmedButton } from "../fields";
+import { ButtonLink } from "~/ui/button";
+import { EmptyState } from "~/ui/empty-state";
+import { Notice } from "~/ui/notice";
+import { PageTitle } from "~/ui/page-frame";
+import { ActionButton, ConfirmedButton } from "../office-form";
 import { notFound } from "../office-reply";
-import { ActionLink, Empty, MainLink, PageHead, SavedNote } from "../page-parts";
+import { SavedNote } from "../page-parts";
 import { StandingOf } from "../standing-of";
 import type { Route } from "./+types/truck";
 import { doneNote, runTruckCommand, truckCommandSchema } from "./truck-commands";
@@ -44,22 +48,30 @@ export default function Truck({ loaderData, actionData }: Route.ComponentProps) 
   const base = `/office/trucks/${truck.unitNumber}`;
   return (
     <>
-      <PageHead
+      <PageTitle
         title={<span className="font-stencil font-normal">{truck.unitNumber}</span>}
-        lead={<StandingOf standing={truck.standing} inService={truck.inService} />}
+        lead={
+          <span className="text-ink">
+            <StandingOf standing={truck.standing} inService={truck.inService} />
+          </span>
+        }
       >
-        <MainLink to={`${base}/sheet`}>{words.sheet}</MainLink>
-      </PageHead>
+        <ButtonLink kind="main" to={`${base}/sheet`}>
+          {words.sheet}
+        </ButtonLink>
+      </PageTitle>
       <SavedNote undo={(done) => done === "removed" && <PutBackLast view={loaderData} />} />
       {actionData?.faults.map((fault) => (
-        <p key={fault} role="alert" className="mb-6 border-l-4 border-red bg-card p-3">
-          {fault}
-        </p>
+        <div key={fault} className="mb-6">
+          <Notice tone="stop" announce="now">
+            {fault}
+          </Notice>
+        </div>
       ))}
       {truck.gateFault && (
-        <p role="alert" className="mb-6 border-l-4 border-red bg-card p-3">
-          {words.gateFault}
-        </p>
+        <div className="mb-6">
+          <Notice tone="stop">{words.gateFault}</Notice>
+        </div>
       )}
       <dl className="mb-4 grid grid-cols-[4rem_1fr] gap-y-2 sm:grid-cols-[8rem_1fr]">
         <dt className="text-mute">{office.trucks.kind}</dt>
@@ -73,8 +85,8 @@ export default function Truck({ loaderData, actionData }: Route.ComponentProps) 
         </dd>
       </dl>
       <p className="mb-10 flex flex-wrap gap-3">
-        <ActionLink to={`${base}/details`}>{words.changeDetails}</ActionLink>
-        <ActionLink to={`${base}/move`}>{words.move}</ActionLink>
+        <ButtonLink to={`${base}/details`}>{words.changeDetails}</ButtonLink>
+        <ButtonLink to={`${base}/move`}>{words.move}</ButtonLink>
       </p>
       <Fittings base={base} view={loaderData} />
       <SetPoints base={base} view={loaderData} />
@@ -137,9 +149,9 @@ function Fittings({ base, view: { fittings, removed } }: { base: string; view: T
       id="fittings"
       title={words.fittings}
       what={`${words.fittingsWhat} ${words.endsWalks}`}
-      action={<ActionLink to={`${base}/fittings/new`}>{words.addFitting}</ActionLink>}
+      action={<ButtonLink to={`${base}/fittings/new`}>{words.addFitting}</ButtonLink>}
     >
-      {fittings.length === 0 && <Empty>{words.noFittings}</Empty>}
+      {fittings.length === 0 && <EmptyState title={words.noFittings} />}
       {fittings.map(({ label, fitted }) => (
         <Fragment key={label}>
           <h3 className="mt-6 mb-2 text-xl font-bold">{label}</h3>
@@ -150,12 +162,12 @@ function Fittings({ base, view: { fittings, removed } }: { base: string; view: T
                 <span className="col-start-1 sm:col-start-2">{line}</span>
                 <span className="col-start-2 row-span-2 row-start-1 flex flex-col gap-2 sm:col-start-3 sm:flex-row sm:gap-3">
                   {hasPlate && (
-                    <ActionLink
+                    <ButtonLink
                       to={`${base}/fittings/${id}`}
-                      label={words.changeOf(fittingKinds[kind])}
+                      aria-label={words.changeOf(fittingKinds[kind])}
                     >
                       {words.change}
-                    </ActionLink>
+                    </ButtonLink>
                   )}
                   <ActionButton
                     name="remove-fitting"
@@ -211,9 +223,12 @@ function SetPoints({ base, view: { setPoints } }: { base: string; view: TruckVie
               {line.unreachable && <p className="font-bold">{line.unreachable}</p>}
             </span>
             <span className="flex gap-3">
-              <ActionLink to={`${base}/set-points/${line.reading}`} label={words.setOf(line.label)}>
+              <ButtonLink
+                to={`${base}/set-points/${line.reading}`}
+                aria-label={words.setOf(line.label)}
+              >
                 {line.set ? words.change : words.setIt}
-              </ActionLink>
+              </ButtonLink>
               {line.set && (
                 <ConfirmedButton
                   name="remove-set-point"
@@ -251,9 +266,9 @@ function Tests({ base, view: { tests, testsLeftOver } }: { base: string; view: T
               {line.note && <span className="block text-mute">{line.note}</span>}
             </span>
             <span className="flex gap-3">
-              <ActionLink to={`${base}/tests/${line.test}`} label={words.recordOf(line.label)}>
+              <ButtonLink to={`${base}/tests/${line.test}`} aria-label={words.recordOf(line.label)}>
                 {words.record}
-              </ActionLink>
+              </ButtonLink>
               {line.mayEnd && (
                 <ConfirmedButton
                   name="end-test"

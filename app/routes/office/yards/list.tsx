@@ -5,7 +5,10 @@ import { listYards } from "~/domain/yards/read-yards";
 import { shownClock } from "~/domain/yards/shown-clock";
 import { shownElevation } from "~/domain/yards/yard-input";
 import { office, withUnit } from "~/text/en/office";
-import { Empty, MainLink, PageHead, SavedNote } from "../page-parts";
+import { ButtonLink } from "~/ui/button";
+import { EmptyState } from "~/ui/empty-state";
+import { PageTitle } from "~/ui/page-frame";
+import { SavedNote } from "../page-parts";
 import type { Route } from "./+types/list";
 
 export async function loader({ context }: Route.LoaderArgs) {
@@ -24,12 +27,14 @@ export default function Yards({ loaderData: { yards } }: Route.ComponentProps) {
   const words = office.yards;
   return (
     <>
-      <PageHead title={words.title}>
-        <MainLink to="/office/yards/new">{words.add}</MainLink>
-      </PageHead>
+      <PageTitle title={words.title}>
+        <ButtonLink kind="main" to="/office/yards/new">
+          {words.add}
+        </ButtonLink>
+      </PageTitle>
       <SavedNote />
       {yards.length === 0 ? (
-        <Empty>{words.none}</Empty>
+        <EmptyState title={words.none} />
       ) : (
         <ul className="divide-y divide-line border-y border-line">
           {yards.map((yard) => (

@@ -5,9 +5,10 @@ import { dbOf } from "~/context";
 import { zoneNames } from "~/domain/yard-day";
 import { addYard } from "~/domain/yards/add-yard";
 import { yardSchema } from "~/domain/yards/yard-input";
+import { unparsedForm } from "~/http/form-reply";
 import { office } from "~/text/en/office";
-import { refusedForm, unparsed } from "../office-reply";
-import { PageHead } from "../page-parts";
+import { PageTitle } from "~/ui/page-frame";
+import { refusedForm } from "../office-reply";
 import type { Route } from "./+types/new";
 import { YardForm } from "./yard-form";
 
@@ -19,7 +20,7 @@ export function loader({ context }: Route.LoaderArgs) {
 export async function action({ context, request }: Route.ActionArgs) {
   const actor = requirePermission(context, "truck.manage");
   const submission = parseWithZod(await request.formData(), { schema: yardSchema });
-  if (submission.status !== "success") return unparsed(submission);
+  if (submission.status !== "success") return unparsedForm(submission);
   const added = await addYard(dbOf(context), actor, submission.value);
   if (!added.ok) return refusedForm(submission, added.refusal);
   throw redirect("/office/yards?done=yard");
@@ -28,7 +29,7 @@ export async function action({ context, request }: Route.ActionArgs) {
 export default function NewYard({ loaderData, actionData }: Route.ComponentProps) {
   return (
     <>
-      <PageHead title={office.yards.addTitle} />
+      <PageTitle title={office.yards.addTitle} />
       <YardForm
         yard={{ elevationUnit: "ft", shopOpens: "06:00" }}
         zones={loaderData.zones}

@@ -1,6 +1,10 @@
 import { type SubmissionResult, useForm } from "@conform-to/react";
-import { office, unitLabel } from "~/text/en/office";
-import { AmountField, CheckField, OfficeForm, SelectField, TextField } from "../fields";
+import { office, unitOptions } from "~/text/en/office";
+import { AmountField } from "~/ui/fields/amount-field";
+import { CheckField } from "~/ui/fields/check-field";
+import { SelectField } from "~/ui/fields/select-field";
+import { TextField } from "~/ui/fields/text-field";
+import { OfficeForm } from "../office-form";
 import { TextLink } from "../page-parts";
 
 /** A yard as its form shows it. */
@@ -14,7 +18,7 @@ export type ShownYard = {
   winter: boolean;
 };
 
-const UNITS = ["ft", "m"].map((value) => ({ value, label: unitLabel(value) }));
+const UNITS = unitOptions(["ft", "m"]);
 
 export function YardForm({
   yard,
@@ -37,7 +41,7 @@ export function YardForm({
       submit={office.save}
       cancelTo={<TextLink to="/office/yards">{office.cancel}</TextLink>}
     >
-      <TextField field={fields.name} label={words.name} maxLength={80} />
+      <TextField field={fields.name} label={words.name} />
       <SelectField
         field={fields.zone}
         label={words.zone}

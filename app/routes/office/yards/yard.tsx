@@ -7,9 +7,10 @@ import { changeYard } from "~/domain/yards/change-yard";
 import { readYard } from "~/domain/yards/read-yards";
 import { shownClock } from "~/domain/yards/shown-clock";
 import { shownElevation, yardSchema } from "~/domain/yards/yard-input";
+import { unparsedForm } from "~/http/form-reply";
 import { office } from "~/text/en/office";
-import { idOr404, notFound, refusedForm, unparsed } from "../office-reply";
-import { PageHead } from "../page-parts";
+import { PageTitle } from "~/ui/page-frame";
+import { idOr404, notFound, refusedForm } from "../office-reply";
 import type { Route } from "./+types/yard";
 import { YardForm } from "./yard-form";
 
@@ -36,7 +37,7 @@ export async function action({ context, params, request }: Route.ActionArgs) {
   const actor = requirePermission(context, "truck.manage");
   const yardId = idOr404(params.yardId);
   const submission = parseWithZod(await request.formData(), { schema: yardSchema });
-  if (submission.status !== "success") return unparsed(submission);
+  if (submission.status !== "success") return unparsedForm(submission);
   const changed = await changeYard(dbOf(context), actor, { ...submission.value, yardId });
   if (!changed.ok) return refusedForm(submission, changed.refusal);
   throw redirect("/office/yards?done=yard");
@@ -45,7 +46,7 @@ export async function action({ context, params, request }: Route.ActionArgs) {
 export default function Yard({ loaderData, actionData }: Route.ComponentProps) {
   return (
     <>
-      <PageHead title={loaderData.yard.name} />
+      <PageTitle title={loaderData.yard.name} />
       <YardForm yard={loaderData.yard} zones={loaderData.zones} result={actionData?.result} />
     </>
   );
