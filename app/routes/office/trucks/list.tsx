@@ -55,7 +55,7 @@ export default function Trucks({ loaderData: { trucks, hasYard } }: Route.Compon
               cell: ({ unitNumber }) => (
                 <Link
                   to={`/office/trucks/${unitNumber}`}
-                  className="inline-flex min-h-11 items-center font-stencil text-xl font-normal text-enamel underline"
+                  className="-my-2 inline-flex min-h-11 items-center font-stencil text-xl font-normal text-enamel underline"
                 >
                   {unitNumber}
                 </Link>

@@ -160,7 +160,7 @@ function Fittings({ base, view: { fittings, removed } }: { base: string; view: T
               <li key={id} className={FITTED}>
                 <span className="font-bold">{fittingKinds[kind]}</span>
                 <span className="col-start-1 sm:col-start-2">{line}</span>
-                <span className="col-start-2 row-span-2 row-start-1 flex flex-col gap-2 sm:col-start-3 sm:flex-row sm:gap-3">
+                <span className="col-start-2 row-span-2 row-start-1 flex flex-col sm:row-span-1 gap-2 sm:col-start-3 sm:flex-row sm:gap-3">
                   {hasPlate && (
                     <ButtonLink
                       to={`${base}/fittings/${id}`}
