@@ -51,7 +51,7 @@ export function dayLabel(day: string): string {
   }).format(new Date(`${day}T00:00:00Z`));
 }
 
-export function plural(count: number, one: string, many: string): string {
+function plural(count: number, one: string, many: string): string {
   return `${number.format(count)} ${count === 1 ? one : many}`;
 }
 
@@ -197,7 +197,7 @@ export const readings: Record<SetPointReading, { label: string; hint: string; un
 
 export const limitedBy = { tank: "the tank", pump: "the pump", gauge: "the gauge" } as const;
 
-export const datedTests: Record<DatedTest, string> = {
+const datedTests: Record<DatedTest, string> = {
   "annual-inspection": "Annual inspection",
   "external-visual": "Tank, external visual",
   "internal-visual": "Tank, internal visual",
