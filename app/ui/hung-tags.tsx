@@ -20,7 +20,7 @@ export function HungTags({ tags, large = false }: { tags: readonly HungTag[]; la
       {tags.slice(0, SHOWN).map((tag) => (
         <li
           key={tag.id}
-          className="relative -mt-1 w-11/12 -rotate-3 rounded-sm border border-tag-edge bg-tag-red py-1.5 pl-6 pr-2 text-tag-white odd:-translate-x-1"
+          className="relative -mt-1 w-11/12 -rotate-3 rounded-sm border border-tag-edge bg-tag-red py-1.5 pl-6 pr-2 text-tag-white even:rotate-2 even:-translate-x-1"
         >
           <span
             aria-hidden="true"

@@ -2,6 +2,7 @@ import { Link } from "react-router";
 import { uiText } from "~/text/en/ui";
 import type { StandingWord } from "~/trade/standing/standing";
 import { type HungTag, HungTags } from "./hung-tags";
+import { KeyBlade } from "./key-blade";
 import { Peg } from "./peg";
 import { StandingGlyph } from "./standing-glyph";
 
@@ -50,10 +51,15 @@ export function KeyTag({
   const out = standing === "out";
   return (
     <article
-      className={`relative mt-7 flex break-inside-avoid flex-col rounded-lg border-2 ${EDGES[standing]} ${
+      className={`relative isolate mt-7 flex break-inside-avoid flex-col ${
         large ? "px-6 pb-6 pt-9 text-center" : "h-[calc(100%-1.75rem)] min-h-32 px-3.5 pb-5 pt-7"
       }`}
     >
+      {!out && <KeyBlade large={large} />}
+      <span
+        aria-hidden="true"
+        className={`absolute inset-0 -z-10 rounded-lg border-2 ${EDGES[standing]}`}
+      />
       <Peg empty={out} />
       <Heading
         className={`font-stencil leading-none ${large ? "text-[3.5rem]" : "text-3xl"} ${out ? "text-mute" : ""}`}
@@ -72,14 +78,14 @@ export function KeyTag({
       {out && <span className="sr-only">{uiText.noKey}</span>}
       {why && <p className={`text-mute ${large ? "mt-2" : "mt-1 text-sm"}`}>{why}</p>}
       {red.length > 0 && (
-        <div className="mt-auto">
+        <div className="mt-auto pt-1">
           <HungTags tags={red} large={large} />
         </div>
       )}
       {!out && (
         <span
           aria-hidden="true"
-          className={`absolute inset-x-0 bottom-0 rounded-b-[0.75rem] ${large ? "h-3.5" : "h-2"} ${FEET[standing]}`}
+          className={`absolute inset-x-0.5 bottom-0.5 -z-10 rounded-b-[0.75rem] ${large ? "h-3.5" : "h-2"} ${FEET[standing]}`}
         />
       )}
     </article>

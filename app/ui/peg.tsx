@@ -32,12 +32,12 @@ export function Peg({ empty = false }: { empty?: boolean }) {
   );
 }
 
-/** The rail the pegs stand on, drawn a cell at a time so that rows may wrap. */
+/** The rail the pegs stand on, drawn by every cell to the row's end so that rows may wrap. */
 export function Rail() {
   return (
     <span
       aria-hidden="true"
-      className="absolute -inset-x-3 -top-5 h-3 border-y border-line bg-card print:hidden"
+      className="absolute -left-8 -top-5 h-3 w-[200rem] border-y border-line bg-card print:hidden"
     />
   );
 }

@@ -66,7 +66,7 @@ export function ShowBoard() {
         </PegRow>
       </div>
       <Shown name="The one tag of a review">
-        <div className="grid max-w-5xl items-start gap-8 sm:grid-cols-2 lg:grid-cols-3">
+        <div className="grid max-w-5xl grid-cols-1 items-start gap-8 sm:grid-cols-2 lg:grid-cols-3">
           <KeyTag
             unit="T-118"
             standing="limited"

@@ -45,7 +45,7 @@ export function ShowFields() {
           </Button>
         </div>
       </Shown>
-      <div className="grid items-start gap-8 lg:grid-cols-2">
+      <div className="grid grid-cols-1 items-start gap-8 lg:grid-cols-2">
         <form className="max-w-xl space-y-5">
           <TextField field={plainField("name")} label="Name of the yard" hint="As people say it." />
           <AmountField

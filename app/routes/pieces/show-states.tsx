@@ -7,7 +7,7 @@ import { Notice } from "~/ui/notice";
 export function ShowStates() {
   return (
     <>
-      <div className="grid gap-4 lg:grid-cols-2">
+      <div className="grid grid-cols-1 gap-4 lg:grid-cols-2">
         <Notice>Kept on this phone: 1 walk, 2 photos. Sends by itself.</Notice>
         <Notice tone="good" title="Inside 19 to 23.">
           Usual here: 20.5 to 21.5.
@@ -26,7 +26,7 @@ export function ShowStates() {
           The last walk ended with yesterday's work.
         </Notice>
       </div>
-      <div className="grid items-start gap-4 lg:grid-cols-3">
+      <div className="grid grid-cols-1 items-start gap-4 lg:grid-cols-3">
         <EmptyState
           title="No open tags"
           action={<ButtonLink to="/pieces">See what was signed off</ButtonLink>}

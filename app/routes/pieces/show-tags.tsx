@@ -13,7 +13,7 @@ export function ShowTags() {
           <TagGlyph colour="white" />
         </p>
       </Shown>
-      <div className="grid items-start gap-5 sm:grid-cols-2 lg:grid-cols-3">
+      <div className="grid grid-cols-1 items-start gap-5 sm:grid-cols-2 lg:grid-cols-3">
         <TagCard
           colour="red"
           title="Float ball missing"

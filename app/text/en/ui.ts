@@ -67,8 +67,9 @@ export const uiText = {
     greatest: (value: string, unit: string) => `Greatest here ${value} ${unit}`,
     usual: (words: string) => `Usual here: ${words}.`,
     gauge: (value: string, unit: string) => `This gauge may be off by ${value} ${unit}`,
+    offScale: (max: string, unit: string) =>
+      `That is off the gauge. It reads 0 to ${max} ${unit}: enter a number from there.`,
     howTo: "Turn the needle, use the buttons, or type.",
-    legend: { band: "band", stop: "stop", greatest: "greatest" },
   },
   airPath: {
     label: { vacuum: "Air path, drawing vacuum", pressure: "Air path, making pressure" },
