@@ -2,17 +2,17 @@
 export function KeyBlade({ large = false }: { large?: boolean }) {
   return (
     <svg
-      viewBox="0 0 20 44"
+      viewBox="0 0 26 54"
       aria-hidden="true"
       strokeLinejoin="round"
-      className={`absolute left-[16%] -z-20 -rotate-6 ${large ? "-bottom-9 h-16 w-7" : "-bottom-5 h-9 w-4"}`}
+      className={`absolute left-[16%] -z-20 -rotate-6 ${large ? "-bottom-11 h-22 w-11" : "-bottom-7 h-14 w-7"}`}
     >
       <path
-        d="M4 0h12v14l-3.5 3 3.5 3v4l-3.5 3 3.5 3v4L11 43H8l-4-6z"
+        d="M6 0h14v24l3 2.5-3 2.5v5l-3.5 2.5 3.5 2.5v5L14.5 52h-3L6 46Z"
         className="fill-line stroke-ink"
-        strokeWidth="2"
+        strokeWidth="2.2"
       />
-      <path d="M8 0v34" className="stroke-mute" strokeWidth="1.5" />
+      <path d="M11 0v43" className="stroke-mute" strokeWidth="2" />
     </svg>
   );
 }

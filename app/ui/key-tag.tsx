@@ -1,3 +1,4 @@
+import type { ReactNode } from "react";
 import { Link } from "react-router";
 import { uiText } from "~/text/en/ui";
 import type { StandingWord } from "~/trade/standing/standing";
@@ -21,12 +22,16 @@ const EDGES: Record<StandingWord, string> = {
   out: "border-dashed border-edge",
 };
 
+/** Unit numbers stay on one line: a longer one is set smaller. */
+const SMALL = { short: "text-3xl", middle: "text-2xl", long: "text-lg" };
+const LARGE = { short: "text-[3.5rem]", middle: "text-[2.75rem]", long: "text-3xl" };
+
 export interface KeyTagProps {
   /** Unit number, as painted on the truck. */
   unit: string;
   standing: StandingWord;
   /** One line why, or what else to know ("No pressure off-load", "Run 31, out 05:55"). */
-  why?: string;
+  why?: ReactNode;
   /** Open red tags; on an empty peg too, where they alert. */
   red?: readonly HungTag[];
   /** Where a press on the tag goes. */
@@ -49,10 +54,11 @@ export function KeyTag({
 }: KeyTagProps) {
   const large = size === "large";
   const out = standing === "out";
+  const fit = unit.length <= 6 ? "short" : unit.length <= 8 ? "middle" : "long";
   return (
     <article
-      className={`relative isolate mt-7 flex break-inside-avoid flex-col ${
-        large ? "px-6 pb-6 pt-9 text-center" : "h-[calc(100%-1.75rem)] min-h-32 px-3.5 pb-5 pt-7"
+      className={`relative isolate mt-7 flex break-inside-avoid flex-col rounded-lg outline-offset-2 outline-brass has-[a:focus-visible]:outline-3 ${
+        large ? "px-6 pb-6 pt-9 text-center" : "min-h-38 px-3.5 pb-5 pt-7"
       }`}
     >
       {!out && <KeyBlade large={large} />}
@@ -62,17 +68,17 @@ export function KeyTag({
       />
       <Peg empty={out} />
       <Heading
-        className={`font-stencil leading-none ${large ? "text-[3.5rem]" : "text-3xl"} ${out ? "text-mute" : ""}`}
+        className={`font-stencil leading-none ${large ? LARGE[fit] : SMALL[fit]} ${out ? "text-mute" : ""}`}
       >
         {to ? (
-          <Link to={to} className="rounded-sm no-underline after:absolute after:inset-0">
+          <Link to={to} className="no-underline outline-none after:absolute after:inset-0">
             {unit}
           </Link>
         ) : (
           unit
         )}
       </Heading>
-      <div className={large ? "mt-3 flex justify-center" : "mt-1.5"}>
+      <div className={`flex ${large ? "mt-3 justify-center" : "mt-2"}`}>
         <StandingGlyph word={standing} large={large} />
       </div>
       {out && <span className="sr-only">{uiText.noKey}</span>}

@@ -26,25 +26,23 @@ export function Menu({ label, items }: { label: ReactNode; items: readonly MenuI
           <path d="m1 1.5 5 5 5-5" className="fill-none stroke-current" strokeWidth="2" />
         </svg>
       </DropdownMenu.Trigger>
-      <DropdownMenu.Portal>
-        <DropdownMenu.Content
-          align="end"
-          sideOffset={6}
-          collisionPadding={16}
-          className="z-40 min-w-48 max-w-[calc(100vw-2rem)] rounded-md border-2 border-ink bg-card p-1.5 text-ink"
-        >
-          {items.map(({ key, label: words, to, onSelect, danger }) => (
-            <DropdownMenu.Item
-              key={key}
-              asChild={to !== undefined}
-              onSelect={onSelect}
-              className={`${ITEM} ${danger ? "font-bold text-red data-highlighted:bg-red" : ""}`}
-            >
-              {to === undefined ? words : <Link to={to}>{words}</Link>}
-            </DropdownMenu.Item>
-          ))}
-        </DropdownMenu.Content>
-      </DropdownMenu.Portal>
+      <DropdownMenu.Content
+        align="end"
+        sideOffset={6}
+        collisionPadding={16}
+        className="z-40 min-w-48 max-w-[calc(100vw-2rem)] rounded-md border-2 border-ink bg-card p-1.5 text-ink"
+      >
+        {items.map(({ key, label: words, to, onSelect, danger }) => (
+          <DropdownMenu.Item
+            key={key}
+            asChild={to !== undefined}
+            onSelect={onSelect}
+            className={`${ITEM} ${danger ? "font-bold text-red data-highlighted:bg-red" : ""}`}
+          >
+            {to === undefined ? words : <Link to={to}>{words}</Link>}
+          </DropdownMenu.Item>
+        ))}
+      </DropdownMenu.Content>
     </DropdownMenu.Root>
   );
 }

@@ -22,7 +22,7 @@ export function PegRow({
         <h2 className="text-lg font-bold">{yard}</h2>
         {note && <p className="text-sm text-mute">{note}</p>}
       </div>
-      <ul className="grid grid-cols-[repeat(auto-fill,minmax(min(100%,9rem),1fr))] gap-x-4 gap-y-9 overflow-hidden px-1 pb-7 pr-2 pt-3 sm:grid-cols-[repeat(auto-fill,minmax(10.5rem,1fr))] sm:gap-x-6">
+      <ul className="grid grid-cols-[repeat(auto-fill,minmax(min(100%,8.75rem),1fr))] items-start gap-x-4 gap-y-10 overflow-hidden px-2 pb-9 pt-3 sm:grid-cols-[repeat(auto-fill,minmax(10.5rem,1fr))] sm:gap-x-6">
         {children}
       </ul>
     </section>

@@ -41,9 +41,9 @@ const DRAWINGS: Record<StandingWord, ReactNode> = {
   ),
   out: (
     <>
-      <path d="M1 8h22" className="stroke-edge" strokeWidth="3" />
-      <circle cx="12" cy="8" r="5.5" className="fill-brass stroke-ink" strokeWidth="1.5" />
-      <path d="M6 17.5v7h12v-7" className="fill-none stroke-mute" strokeDasharray="3 2.5" />
+      <path d="M1.5 14h21" className="stroke-edge" strokeWidth="3" />
+      <circle cx="12" cy="14" r="7.5" className="fill-brass stroke-ink" />
+      <circle cx="12" cy="14" r="3.5" className="fill-none stroke-ink" />
     </>
   ),
 };
@@ -74,7 +74,7 @@ export function StandingDrawing({
 export function StandingGlyph({ word, large = false }: { word: StandingWord; large?: boolean }) {
   return (
     <span
-      className={`inline-flex items-center font-bold ${large ? "gap-3 text-3xl" : "gap-2 text-lg leading-tight"}`}
+      className={`inline-flex items-center font-bold ${large ? "flex-wrap justify-center gap-x-3 text-3xl" : "gap-2 text-lg leading-tight"}`}
     >
       <StandingDrawing word={word} className={large ? "h-12 w-10" : undefined} />
       {standingText[word]}

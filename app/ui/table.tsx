@@ -103,9 +103,12 @@ function TableCell<Row>({ column, row, stack }: { column: Column<Row>; row: Row;
   );
   if (column.rowHead) {
     return (
-      <th role="rowheader" scope="row" className={`${look} font-bold`}>
-        {head}
-        {value}
+      <th
+        role="rowheader"
+        scope="row"
+        className={`py-2.5 pr-4 align-top font-bold ${stack ? "max-sm:block max-sm:py-1 max-sm:text-lg" : ""}`}
+      >
+        {column.cell(row)}
       </th>
     );
   }

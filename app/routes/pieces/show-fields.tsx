@@ -1,3 +1,4 @@
+import { useState } from "react";
 import { Button, ButtonLink } from "~/ui/button";
 import { ErrorSummary } from "~/ui/error-summary";
 import { AmountField } from "~/ui/fields/amount-field";
@@ -24,6 +25,7 @@ const units = [
 ] as const;
 
 export function ShowFields() {
+  const [refused, setRefused] = useState(false);
   return (
     <>
       <Shown name="Buttons">
@@ -87,12 +89,16 @@ export function ShowFields() {
           />
         </form>
         <form className="max-w-xl space-y-5">
-          <ErrorSummary
-            fields={[
-              ["Unit number", faultyUnit],
-              ["Stop value", faultyStop],
-            ]}
-          />
+          {refused ? (
+            <ErrorSummary
+              fields={[
+                ["Unit number", faultyUnit],
+                ["Stop value", faultyStop],
+              ]}
+            />
+          ) : (
+            <Button onClick={() => setRefused(true)}>Show the error summary</Button>
+          )}
           <TextField field={faultyUnit} label="Unit number" />
           <AmountField
             field={faultyStop}

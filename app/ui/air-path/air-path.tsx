@@ -55,7 +55,7 @@ export function AirPath({
 function Part({ part }: { part: AirPathPart }) {
   const { label, state, note, to, onOpen } = part;
   const className =
-    "relative flex w-full items-center gap-4 rounded-md text-left no-underline @4xl:flex-col @4xl:gap-2 @4xl:px-1 @4xl:text-center";
+    "relative flex w-full items-start gap-4 rounded-md text-left no-underline @4xl:flex-col @4xl:items-center @4xl:gap-2 @4xl:px-1 @4xl:text-center";
   const inside = (
     <>
       <svg
@@ -68,7 +68,7 @@ function Part({ part }: { part: AirPathPart }) {
       >
         {PART_SHAPES[part.shape]}
       </svg>
-      <span className="min-w-0">
+      <span className="min-w-0 pt-2 @4xl:pt-0">
         <span className={`block font-bold leading-tight ${to || onOpen ? "underline" : ""}`}>
           {label}
         </span>
@@ -99,17 +99,17 @@ function Part({ part }: { part: AirPathPart }) {
 /** From one part to the next: down on a phone, to the right in a row. The head says which way air goes. */
 function Pipe({ back }: { back: boolean }) {
   return (
-    <svg
-      viewBox="0 0 28 12"
+    <span
       aria-hidden="true"
-      className="absolute bottom-2 left-4.5 h-3 w-7 rotate-90 @4xl:bottom-auto @4xl:left-full @4xl:top-[1.625rem] @4xl:-translate-x-1/2 @4xl:rotate-0"
+      className="absolute bottom-0 left-[1.625rem] top-16 flex w-3 items-center justify-center border-x-2 border-edge @4xl:bottom-auto @4xl:left-[calc(50%+2rem)] @4xl:top-[1.625rem] @4xl:h-3 @4xl:w-[calc(100%-4rem)] @4xl:border-x-0 @4xl:border-y-2"
     >
-      <path d="M0 3.5h28M0 8.5h28" className="stroke-line" strokeWidth="2" />
-      <path
-        d={back ? "M18 1 9 6l9 5Z" : "M10 1l9 5-9 5Z"}
-        className="fill-ink stroke-paper"
-        strokeWidth="1"
-      />
-    </svg>
+      <svg
+        aria-hidden="true"
+        viewBox="0 0 20 20"
+        className={`size-5 shrink-0 ${back ? "-rotate-90 @4xl:rotate-180" : "rotate-90 @4xl:rotate-0"}`}
+      >
+        <path d="M3 2l15 8-15 8Z" className="fill-ink stroke-paper" strokeWidth="2" />
+      </svg>
+    </span>
   );
 }

@@ -1,3 +1,4 @@
+import { wordmark } from "~/text/en/ui";
 import {
   angleOf,
   arcPath,
@@ -35,21 +36,24 @@ export function DialFace({ vacuum, pressure, side, marks, value, showUncertainty
   return (
     <svg viewBox="0 0 320 320" aria-hidden="true" className="block w-full select-none">
       <circle cx={CENTER} cy={CENTER} r="156" className="fill-brass stroke-ink" strokeWidth="2.5" />
-      <circle cx={CENTER} cy={CENTER} r="147" className="fill-card stroke-ink" strokeWidth="2" />
+      <circle cx={CENTER} cy={CENTER} r="149" className="fill-card stroke-ink" strokeWidth="2" />
       <Marks marks={marks} scale={scale} side={side} />
       <Scale scale={vacuum} side="vacuum" muted={side !== "vacuum"} />
       <Scale scale={pressure} side="pressure" muted={side !== "pressure"} />
       {showUncertainty && value !== null && marks.uncertainty !== undefined && (
-        <path
-          d={arcPath(
-            angleOf(value - marks.uncertainty, scale, side),
-            angleOf(value + marks.uncertainty, scale, side),
-            84,
-          )}
-          className="fill-none stroke-enamel opacity-35"
-          strokeWidth="52"
+        <Uncertainty
+          from={angleOf(value - marks.uncertainty, scale, side)}
+          to={angleOf(value + marks.uncertainty, scale, side)}
         />
       )}
+      <text
+        x={CENTER}
+        y="290"
+        textAnchor="middle"
+        className="fill-ink font-stencil text-[14px] tracking-wide"
+      >
+        {wordmark}
+      </text>
       <Needle angle={angleOf(value ?? 0, scale, side)} set={value !== null} />
     </svg>
   );
@@ -122,12 +126,7 @@ function Marks({ marks, scale, side }: { marks: DialMarks; scale: DialScale; sid
         </>
       )}
       {greatest !== undefined && (
-        <path
-          d={spokePath(at(greatest), 117, 140)}
-          className="stroke-ink"
-          strokeWidth="2.5"
-          strokeDasharray="4 3"
-        />
+        <path d={spokePath(at(greatest), 117, 140)} className="stroke-ink" strokeWidth="2.5" />
       )}
       {stop !== undefined && <StopMark angle={at(stop)} />}
     </g>
@@ -148,13 +147,24 @@ function StopMark({ angle }: { angle: number }) {
   );
 }
 
+/** Where the true value may be: a pale field behind the needle, with a bar along the rim. */
+function Uncertainty({ from, to }: { from: number; to: number }) {
+  return (
+    <g className="fill-none stroke-enamel">
+      <path d={arcPath(from, to, 70)} className="opacity-30" strokeWidth="136" />
+      <path d={arcPath(from, to, 144.5)} strokeWidth="5" />
+      <path d={spokePath(from, 122, 147) + spokePath(to, 122, 147)} strokeWidth="2" />
+    </g>
+  );
+}
+
 function Needle({ angle, set }: { angle: number; set: boolean }) {
   return (
     <>
       <path
-        d="M160 44 165 160 162.5 192h-5L155 160Z"
+        d="M158.5 41h3L166.5 160 163 196h-6L153.5 160Z"
         transform={`rotate(${angle} ${CENTER} ${CENTER})`}
-        className={set ? "fill-ink stroke-card" : "fill-card stroke-mute"}
+        className={set ? "fill-ink stroke-ink" : "fill-card stroke-mute"}
         strokeWidth="1.5"
         strokeDasharray={set ? undefined : "4 3"}
         strokeLinejoin="round"

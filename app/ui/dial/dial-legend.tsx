@@ -56,8 +56,8 @@ export function DialLegend({
 
 function Mark({ drawing, children }: { drawing: ReactNode; children: ReactNode }) {
   return (
-    <li className="flex items-center gap-1.5 whitespace-nowrap">
-      <svg viewBox="0 0 16 16" aria-hidden="true" className="size-4">
+    <li className="flex items-center gap-1.5">
+      <svg viewBox="0 0 16 16" aria-hidden="true" className="size-4 shrink-0">
         {drawing}
       </svg>
       {children}

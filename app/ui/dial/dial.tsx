@@ -43,7 +43,7 @@ export function Dial(props: DialProps) {
   const verdict = dial.value === null ? undefined : props.verdict?.(dial.value);
   const words = uiText.dial;
   return (
-    <div className="mx-auto w-full max-w-sm">
+    <div className="@container mx-auto w-full max-w-sm">
       <div
         role="slider"
         tabIndex={0}
@@ -73,11 +73,11 @@ export function Dial(props: DialProps) {
         shown={showUncertainty}
         onToggle={() => setShowUncertainty(!showUncertainty)}
       />
-      <div className="mt-3 flex flex-wrap items-center justify-between gap-3">
+      <div className="mt-3 flex flex-wrap items-center justify-between gap-3 @3xs:flex-nowrap">
         <StepButton label={words.less(`${step} ${scale.unit}`)} onStep={() => dial.move(-1)}>
           −
         </StepButton>
-        <label className="flex min-w-0 flex-1 basis-28 items-baseline justify-center gap-1.5 border-b-2 border-edge focus-within:border-ink">
+        <label className="order-first flex min-w-0 basis-full items-baseline justify-center gap-1.5 border-b-2 border-edge focus-within:border-ink @3xs:order-none @3xs:basis-auto">
           <input
             {...controlProps(field, null)}
             type="text"
@@ -87,7 +87,7 @@ export function Dial(props: DialProps) {
             aria-label={words.typed(label, scale.unit)}
             value={dial.typed}
             onChange={(event) => dial.type(event.target.value)}
-            className="w-[2.3em] min-w-0 bg-transparent text-right text-reading font-bold tabular-nums placeholder:text-mute"
+            className="w-[2.3em] min-w-0 bg-transparent text-right text-[length:min(2.75rem,15vw)] leading-tight font-bold tabular-nums placeholder:text-mute"
           />
           <span className="text-lg text-mute">{scale.unit}</span>
         </label>
