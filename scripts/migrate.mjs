@@ -15,9 +15,13 @@ const name = (id) => connection.escapeId(id);
 try {
   await connection.query(`create database if not exists ${name(database)} character set utf8mb4`);
   await connection.query(`use ${name(database)}`);
-  const [[lock]] = await connection.query("select get_lock(?, 120) as held", [`migrate-${database}`]);
+  const [[lock]] = await connection.query("select get_lock(?, 120) as held", [
+    `migrate-${database}`,
+  ]);
   if (lock.held !== 1) throw new Error("another migration is running");
-  await migrate(drizzle({ client: connection }), { migrationsFolder: new URL("../drizzle", import.meta.url).pathname });
+  await migrate(drizzle({ client: connection }), {
+    migrationsFolder: new URL("../drizzle", import.meta.url).pathname,
+  });
   const host = process.env.KEYPEG_APP_HOST ?? "127.0.0.1";
   const user = `${connection.escape(env("KEYPEG_APP_USER"))}@${connection.escape(host)}`;
   const password = connection.escape(env("KEYPEG_APP_PASSWORD"));

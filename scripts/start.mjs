@@ -29,7 +29,10 @@ try {
   const services = await startServices(children, root, folder, { smtpPort: 4190, mailPort: 4191 });
   const port = await freePort(Number(process.env.PORT ?? 4180));
   const environment = { ...process.env, ...serverEnvironment(services, DATABASE, port) };
-  const migrate = { cwd: root, env: { ...process.env, ...migrationEnvironment(services, DATABASE) } };
+  const migrate = {
+    cwd: root,
+    env: { ...process.env, ...migrationEnvironment(services, DATABASE) },
+  };
   if ((await children.run("migrate", process.execPath, ["scripts/migrate.mjs"], migrate)) !== 0) {
     throw new Error("The migration failed");
   }

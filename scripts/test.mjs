@@ -73,7 +73,12 @@ async function journeys(services) {
     KEYPEG_CHROMIUM: programPath("chromium"),
     PLAYWRIGHT_JSON_OUTPUT_NAME: file,
   };
-  const args = ["node_modules/@playwright/test/cli.js", "test", "--reporter=list,json", ...forJourneys];
+  const args = [
+    "node_modules/@playwright/test/cli.js",
+    "test",
+    "--reporter=list,json",
+    ...forJourneys,
+  ];
   const code = await children.run("journeys", process.execPath, args, { cwd: root, env });
   const stats = report(file)?.stats;
   add((stats?.expected ?? 0) + (stats?.flaky ?? 0), stats?.unexpected ?? 0, code);

@@ -17,7 +17,10 @@ export function problem(
 ): Response {
   return new Response(
     JSON.stringify({ type: `urn:keypeg:problem:${code}`, status, code, ...more }),
-    { status, headers: { "Content-Type": "application/problem+json", "Cache-Control": "no-store" } },
+    {
+      status,
+      headers: { "Content-Type": "application/problem+json", "Cache-Control": "no-store" },
+    },
   );
 }
 

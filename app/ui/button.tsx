@@ -2,9 +2,9 @@ import type { ComponentProps } from "react";
 import { Link } from "react-router";
 
 /** One `main` a screen. `quiet` stands beside it; `danger` ends or refuses something. */
-export type ButtonKind = "main" | "quiet" | "danger";
+type ButtonKind = "main" | "quiet" | "danger";
 /** `walk` is for gloves (56 px), `desk` for the bench, board and office (44 px). */
-export type ButtonSize = "walk" | "desk";
+type ButtonSize = "walk" | "desk";
 
 interface Look {
   kind?: ButtonKind;

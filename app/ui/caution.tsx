@@ -58,7 +58,7 @@ export function Caution({
   children: ReactNode;
 }) {
   return (
-    <div className="flex items-start gap-4 rounded-lg border-2 border-ink bg-card p-3 pr-4">
+    <div className="flex flex-wrap items-start gap-x-4 gap-y-2 rounded-lg border-2 border-ink bg-card p-3 pr-4">
       <svg
         viewBox="0 0 48 48"
         role="img"
@@ -67,7 +67,7 @@ export function Caution({
       >
         {SIGNS[shape]}
       </svg>
-      <div className="min-w-0 self-center">
+      <div className="min-w-0 flex-1 basis-40 self-center">
         <p className="font-bold leading-tight">{title}</p>
         <p className="mt-0.5 leading-snug">{children}</p>
       </div>

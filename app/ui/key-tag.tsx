@@ -58,7 +58,7 @@ export function KeyTag({
   return (
     <article
       className={`relative isolate mt-7 flex break-inside-avoid flex-col rounded-lg outline-offset-2 outline-brass has-[a:focus-visible]:outline-3 ${
-        large ? "px-6 pb-6 pt-9 text-center" : "min-h-38 px-3.5 pb-5 pt-7"
+        large ? "mb-10 px-6 pb-6 pt-9 text-center" : "min-h-38 px-3.5 pb-5 pt-7"
       }`}
     >
       {!out && <KeyBlade large={large} />}

@@ -1,11 +1,12 @@
 import type { ReactNode } from "react";
 import { Link, NavLink } from "react-router";
 import { uiText } from "~/text/en/ui";
+import { SkipLink } from "./skip-link";
 import { ThemeSwitch } from "./theme-switch";
 import { Wordmark } from "./wordmark";
 
 /** A part of the product the signed-in person may enter; the caller asks the permission table. */
-export interface Place {
+interface Place {
   to: string;
   label: string;
 }
@@ -26,19 +27,14 @@ export function PageFrame({ places = [], person, out, wide = false, children }: 
   const width = wide ? "max-w-[100rem]" : "max-w-6xl";
   return (
     <>
-      <a
-        href="#page"
-        className="sr-only z-50 bg-card px-4 py-3 font-bold underline focus:not-sr-only focus:absolute focus:left-2 focus:top-2"
-      >
-        {uiText.skip}
-      </a>
+      <SkipLink />
       <header className={`mx-auto px-4 pt-3 sm:px-6 print:hidden ${width}`}>
         <div className="flex flex-wrap items-center gap-x-6 gap-y-1 border-b-2 border-ink">
           <Link to="/" className="mr-auto inline-flex min-h-14 items-center no-underline">
             <Wordmark />
           </Link>
-          <div className="flex flex-wrap items-center gap-x-4">
-            <ThemeSwitch />
+          <ThemeSwitch />
+          <div className="flex flex-wrap items-center gap-x-4 max-sm:w-full max-sm:justify-between empty:hidden">
             {person && (
               <Link
                 to={person.to}

@@ -49,7 +49,7 @@ const DRAWINGS: Record<StandingWord, ReactNode> = {
 };
 
 /** The drawing alone, hidden from screen readers: always beside its word. */
-export function StandingDrawing({
+function StandingDrawing({
   word,
   className = "h-7 w-6",
 }: {

@@ -1,9 +1,6 @@
-import { useSyncExternalStore } from "react";
-
-export type Theme = "day" | "night";
+type Theme = "day" | "night";
 
 const KEY = "keypeg.theme";
-const CHANGED = "keypeg:theme";
 
 /** Sets the choice kept on this device before the first paint. Backticks, since React escapes quotes. */
 export const THEME_SCRIPT =
@@ -31,20 +28,4 @@ export function switchTheme(): void {
   } catch {
     // Storage is off on this device: the choice lasts until the page is left.
   }
-  window.dispatchEvent(new Event(CHANGED));
-}
-
-function subscribe(changed: () => void): () => void {
-  const phone = matchMedia("(prefers-color-scheme: dark)");
-  phone.addEventListener("change", changed);
-  window.addEventListener(CHANGED, changed);
-  return () => {
-    phone.removeEventListener("change", changed);
-    window.removeEventListener(CHANGED, changed);
-  };
-}
-
-/** What is shown now; null on the server and until the page is alive. */
-export function useTheme(): Theme | null {
-  return useSyncExternalStore(subscribe, shownTheme, () => null);
 }

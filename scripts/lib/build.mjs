@@ -2,7 +2,15 @@ import { createHash } from "node:crypto";
 import { existsSync, readdirSync, readFileSync, writeFileSync } from "node:fs";
 import { join } from "node:path";
 
-const SOURCES = ["app", "public", "scripts", "server.ts", "package-lock.json", "vite.config.ts", "react-router.config.ts"];
+const SOURCES = [
+  "app",
+  "public",
+  "scripts",
+  "server.ts",
+  "package-lock.json",
+  "vite.config.ts",
+  "react-router.config.ts",
+];
 
 function sourceHash(root) {
   const hash = createHash("sha256");
@@ -13,8 +21,11 @@ function sourceHash(root) {
       continue;
     }
     const entries = readdirSync(join(root, source), { withFileTypes: true, recursive: true });
-    const files = entries.filter((entry) => entry.isFile()).map((entry) => join(entry.parentPath ?? entry.path, entry.name));
-    for (const file of files.sort()) hash.update(file.slice(root.length)).update(readFileSync(file));
+    const files = entries
+      .filter((entry) => entry.isFile())
+      .map((entry) => join(entry.parentPath ?? entry.path, entry.name));
+    for (const file of files.sort())
+      hash.update(file.slice(root.length)).update(readFileSync(file));
   }
   return hash.digest("hex");
 }
@@ -29,7 +40,10 @@ export async function ensureBuild(children, root, folder) {
   const router = join(root, "node_modules/@react-router/dev/bin.cjs");
   const how = { cwd: root, env, show: false };
   for (const [name, args] of [
-    ["build-router", [existsSync(router) ? router : join(root, "node_modules/@react-router/dev/bin.js"), "build"]],
+    [
+      "build-router",
+      [existsSync(router) ? router : join(root, "node_modules/@react-router/dev/bin.js"), "build"],
+    ],
     ["build-server", [join(root, "scripts/build.mjs")]],
   ]) {
     if ((await children.run(name, process.execPath, args, how)) !== 0) {

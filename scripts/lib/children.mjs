@@ -1,5 +1,13 @@
 import { spawn } from "node:child_process";
-import { closeSync, existsSync, mkdirSync, openSync, readFileSync, rmSync, writeFileSync } from "node:fs";
+import {
+  closeSync,
+  existsSync,
+  mkdirSync,
+  openSync,
+  readFileSync,
+  rmSync,
+  writeFileSync,
+} from "node:fs";
 import { join } from "node:path";
 import { setTimeout as wait } from "node:timers/promises";
 
@@ -70,7 +78,9 @@ export class Children {
     });
     entry.exited.then((how) => {
       if (this.#ending || options.mayEnd) return;
-      console.error(`${name} ended by itself (${how}); its log is ${join(this.#folder, `${name}.log`)}`);
+      console.error(
+        `${name} ended by itself (${how}); its log is ${join(this.#folder, `${name}.log`)}`,
+      );
       this.stop().then(() => process.exit(1));
     });
     return entry;

@@ -1,6 +1,13 @@
 import { spawnSync } from "node:child_process";
 import { randomBytes } from "node:crypto";
-import { chmodSync, existsSync, mkdirSync, mkdtempSync, readFileSync, writeFileSync } from "node:fs";
+import {
+  chmodSync,
+  existsSync,
+  mkdirSync,
+  mkdtempSync,
+  readFileSync,
+  writeFileSync,
+} from "node:fs";
 import { tmpdir } from "node:os";
 import { join } from "node:path";
 import { setTimeout as wait } from "node:timers/promises";
@@ -15,7 +22,8 @@ function installData(data) {
   const done = spawnSync(programPath("mariadb-install-db"), [...args, method, ...asRoot], {
     encoding: "utf8",
   });
-  if (done.status !== 0) throw new Error(`mariadb-install-db failed:\n${done.stdout}${done.stderr}`);
+  if (done.status !== 0)
+    throw new Error(`mariadb-install-db failed:\n${done.stdout}${done.stderr}`);
 }
 
 /** One statement or more as the administrator, through the socket. Null when it could not connect. */

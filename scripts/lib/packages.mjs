@@ -19,7 +19,10 @@ export function programPath(name) {
 }
 
 function run(command, args, env = {}) {
-  const done = spawnSync(command, args, { stdio: ["ignore", "inherit", "inherit"], env: { ...process.env, ...env } });
+  const done = spawnSync(command, args, {
+    stdio: ["ignore", "inherit", "inherit"],
+    env: { ...process.env, ...env },
+  });
   return done.status === 0;
 }
 
@@ -33,7 +36,9 @@ export function ensurePrograms(names) {
   const root = process.getuid() === 0;
   const line = `${root ? "" : "sudo "}apt-get update && ${root ? "" : "sudo "}${install.join(" ")}`;
   if (!root && programPath("sudo") === null) {
-    throw new Error(`Missing: ${packages.join(", ")}. There is no sudo here; as root, run:\n  ${line}`);
+    throw new Error(
+      `Missing: ${packages.join(", ")}. There is no sudo here; as root, run:\n  ${line}`,
+    );
   }
   console.log(`Installing ${packages.join(", ")} …`);
   const as = (args) => (root ? args : ["sudo", "DEBIAN_FRONTEND=noninteractive", ...args]);
@@ -49,7 +54,9 @@ export function ensurePrograms(names) {
 
 /** Installs node_modules when the lock file is not the one they were installed from. */
 export function ensureNodeModules(root) {
-  const lock = createHash("sha256").update(readFileSync(join(root, "package-lock.json"))).digest("hex");
+  const lock = createHash("sha256")
+    .update(readFileSync(join(root, "package-lock.json")))
+    .digest("hex");
   const stamp = join(root, "node_modules", ".keypeg-lock");
   if (existsSync(stamp) && readFileSync(stamp, "utf8") === lock) return;
   console.log("Installing packages …");

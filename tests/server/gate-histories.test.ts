@@ -114,7 +114,26 @@ const step = fc.oneof(
   },
   { weight: 3, arbitrary: fc.record({ do: fc.constant("round") }) },
 );
-type Step = { do: string } & Record<string, never>;
+interface Step {
+  do: string;
+  who: number;
+  age: number;
+  clears: boolean;
+  skips: boolean;
+  tag: string | null;
+  base: number;
+  pick: number;
+  days: number;
+  deep: boolean;
+  all: boolean;
+  pressure: boolean;
+  vacuum: number;
+  ends: boolean;
+  ms: number;
+  on: boolean;
+  walkHours: number;
+  kind: string;
+}
 
 class History {
   readonly clock = new TestClock();

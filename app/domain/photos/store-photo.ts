@@ -1,11 +1,11 @@
 import { and, eq, isNull } from "drizzle-orm";
 import sharp from "sharp";
 import type { Db } from "../../db/client";
+import { inTransaction } from "../../db/retry";
 import { photos } from "../../db/schema/tags";
 import { type Clock, systemClock } from "../../services/clock";
 import type { Actor } from "../actor";
 import { writeChanges } from "../feed";
-import { inTransaction } from "../../db/retry";
 import { sha256Hex } from "../receipts/once";
 
 /** Where picture bytes go: put verifies what it wrote before it answers. */

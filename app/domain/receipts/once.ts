@@ -85,7 +85,10 @@ export async function once<R>(
   const before = await stored<R>(db, actor, sent, clock.now());
   if (before) return before;
   try {
-    return await run();
+    const result = await run();
+    if (result.ok) return result;
+    // The same record may have gone through while this one waited for the truck.
+    return (await stored<R>(db, actor, sent, clock.now())) ?? result;
   } catch (error) {
     if (errnoOf(error) !== DUPLICATE_KEY) throw error;
     const after = await stored<R>(db, actor, sent, clock.now());

@@ -1,8 +1,8 @@
-import { and, desc, eq } from "drizzle-orm";
+import { and, desc, eq, inArray } from "drizzle-orm";
 import { v7 as uuidv7 } from "uuid";
 import type { Db } from "../../db/client";
 import { photos, tagChanges, tags } from "../../db/schema/tags";
-import { rounds, sheetVersions, trucks } from "../../db/schema/trucks";
+import { rounds, sheetVersions } from "../../db/schema/trucks";
 import { answers, readings, walks } from "../../db/schema/walks";
 import { type Clock, systemClock } from "../../services/clock";
 import { colourRank } from "../../trade/limits";
@@ -16,7 +16,7 @@ import type { Actor } from "../actor";
 import { changeTruck, type GateChange } from "../gate/change-truck";
 import { readOpenTags } from "../gate/read-facts";
 import { once, sha256Hex } from "../receipts/once";
-import { ok, refuse, type Result } from "../refusals";
+import { ok, type Result, refuse } from "../refusals";
 import { sheetForTruck } from "../sheets/sheet-for-truck";
 import { yardOfTruck } from "../tags/yard-of-truck";
 import { yardDay } from "../yard-day";
@@ -63,7 +63,12 @@ async function findSheet(db: Db, actor: Actor, body: WalkBody): Promise<WalkShee
     .limit(1);
   if (older) return { ...older, sheet: older.body as Sheet };
   const sent = sheetSchema.safeParse(body.sheet);
-  return { id: uuidv7(), setupVersion: 0, sheet: sent.success ? sent.data : sheet, madeHere: false };
+  return {
+    id: uuidv7(),
+    setupVersion: 0,
+    sheet: sent.success ? sent.data : sheet,
+    madeHere: false,
+  };
 }
 
 function checksByKey(sheet: Sheet): Map<string, Check> {
@@ -93,12 +98,35 @@ function tagRows(body: WalkBody, judged: Judgement, byKey: Map<string, Check>) {
         title: check ? `${check.label}: ${problem?.label ?? tag.problemKey}` : tag.problemKey,
         part: check?.part ?? null,
         fittingId: check?.fittingId ?? null,
-        roadSafety: check === undefined || check.part !== null,
+        roadSafety: check?.roadSafety ?? true,
         driverFix: problem?.driverFix ?? false,
         remote: problem?.remote ?? false,
       };
     });
   return [...proposed, ...beside];
+}
+
+/** Open tags as a new finding is compared with them. */
+async function comparableTags(tx: Db, key: { carrierId: string; truckId: string }) {
+  const facts = await readOpenTags(tx, key, { zone: "UTC", shopOpensMinute: 0 });
+  if (facts.length === 0) return [];
+  const rows = await tx
+    .select({ id: tags.id, checkKey: tags.checkKey, problemKey: tags.problemKey })
+    .from(tags)
+    .where(
+      and(
+        eq(tags.carrierId, key.carrierId),
+        inArray(
+          tags.id,
+          facts.map((fact) => fact.id),
+        ),
+      ),
+    );
+  return facts.flatMap(({ id, colour, limit }) => {
+    const row = rows.find((known) => known.id === id);
+    if (!row?.checkKey || !row.problemKey) return [];
+    return [{ checkKey: row.checkKey, problemKey: row.problemKey, colour, limit }];
+  });
 }
 
 /** What the walk says of tags that hung before it: `worse` may raise a colour, nothing lowers one. */
@@ -142,10 +170,13 @@ async function writeAnswers(
   if (given.length > 0) {
     await change.tx
       .insert(answers)
-      .values(given.map(([checkKey, answer]) => ({ carrierId, walkId: body.id, checkKey, body: answer })));
+      .values(
+        given.map(([checkKey, answer]) => ({ carrierId, walkId: body.id, checkKey, body: answer })),
+      );
   }
   if (judged.readings.length === 0) return;
-  const pumpHours = judged.readings.find((reading) => reading.quantity === "pump-hours")?.si ?? null;
+  const pumpHours =
+    judged.readings.find((reading) => reading.quantity === "pump-hours")?.si ?? null;
   await change.tx.insert(readings).values(
     judged.readings.map((reading) => ({
       carrierId,
@@ -179,7 +210,6 @@ export async function recordWalk(
     const found = await findSheet(db, actor, body);
     if (!found) return refuse("not-found");
     const due = dueChecks(found.sheet, { walkKind: body.kind });
-    const judged = judgeAnswers(found.sheet, due, body.answers);
     const byKey = checksByKey(found.sheet);
     const key = { carrierId, truckId: body.truckId };
     const changed = await changeTruck(
@@ -189,6 +219,11 @@ export async function recordWalk(
         const { tx, now } = change;
         const { zone, elevationM } = await yardOfTruck(tx, carrierId, body.truckId);
         const age = countsFrom(now, sent.age);
+        const openTags = await comparableTags(tx, key);
+        const judged = judgeAnswers(found.sheet, due, body.answers, {
+          walkKind: body.kind,
+          openTags,
+        });
         let clearsNot: ClearsNot | null = age.clearsNot;
         if (!found.madeHere) clearsNot = "sheet-unknown";
         else if (!judged.complete) clearsNot = "incomplete";

@@ -1,7 +1,7 @@
-import { recordWalk } from "~/domain/walks/record-walk";
-import { walkSchema } from "~/domain/walks/walk-schema";
 import { requirePermission } from "~/auth/require-permission";
 import { dbOf } from "~/context";
+import { recordWalk } from "~/domain/walks/record-walk";
+import { walkSchema } from "~/domain/walks/walk-schema";
 import { invalidProblem, problem, refusalProblem } from "~/http/problem";
 import { apiText } from "~/text/en/api";
 import type { Route } from "./+types/walks";

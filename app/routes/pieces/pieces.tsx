@@ -1,8 +1,9 @@
-import { data } from "react-router";
+import { data, Link, useSearchParams } from "react-router";
 import { PageFrame, PageTitle } from "~/ui/page-frame";
 import type { Route } from "./+types/pieces";
 import { pieceMap } from "./piece-map";
 import { PieceSection } from "./piece-section";
+import { ShowWalkFrame } from "./show-walk-frame";
 
 export function loader(_: Route.LoaderArgs) {
   if (!import.meta.env.DEV && process.env.KEYPEG_PIECES !== "1") {
@@ -12,6 +13,8 @@ export function loader(_: Route.LoaderArgs) {
 }
 
 export default function PiecesPage() {
+  const [search] = useSearchParams();
+  if (search.get("frame") === "walk") return <ShowWalkFrame />;
   return (
     <PageFrame
       wide
@@ -38,6 +41,14 @@ export default function PiecesPage() {
               <span className="block text-sm text-mute">{files}</span>
             </li>
           ))}
+          <li>
+            <Link to="/pieces?frame=walk" className="inline-block py-1 font-bold underline">
+              Frames
+            </Link>
+            <span className="block text-sm text-mute">
+              walk-frame; page-frame is this page's own
+            </span>
+          </li>
         </ul>
       </nav>
       {pieceMap.map(({ id, title, Show }) => (

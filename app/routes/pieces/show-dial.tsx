@@ -2,15 +2,15 @@ import { Dial, type DialProps } from "~/ui/dial/dial";
 import { plainField } from "~/ui/fields/field-shape";
 import { Shown } from "./piece-section";
 
-const scales = {
+export const scales = {
   vacuum: { unit: "inHg", max: 30, numbered: 10 },
   pressure: { unit: "psi", max: 30, numbered: 10 },
 } as const;
 
-const vacuumMarks = { band: { from: 19, to: 23 }, stop: 26, greatest: 28, uncertainty: 0.6 };
+export const vacuumMarks = { band: { from: 19, to: 23 }, stop: 26, greatest: 28, uncertainty: 0.6 };
 
 /** Filler: a screen judges with the product's own rules. */
-function verdict(value: number): ReturnType<NonNullable<DialProps["verdict"]>> {
+export function verdict(value: number): ReturnType<NonNullable<DialProps["verdict"]>> {
   if (value < 19) return { tone: "limit", title: "Below 19.", text: "A yellow tag goes on." };
   if (value <= 23) return { tone: "good", title: "Inside 19 to 23." };
   return { tone: "stop", title: "Above 23.", text: "Neutral, PTO out. A red tag goes on." };

@@ -15,7 +15,7 @@ const NAMES = [
   "Pull-out",
 ];
 
-function strip(states: string) {
+export function strip(states: string) {
   const words: Record<string, StationState> = {
     d: "done",
     n: "now",

@@ -22,6 +22,7 @@ export const tagText: Record<Colour, string> = {
 export const uiText = {
   skip: "Skip to the page",
   places: "Places",
+  answers: "Answers",
   account: "Your account",
   signOut: "Sign out",
   noKey: "No key on this peg",

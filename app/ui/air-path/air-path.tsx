@@ -2,7 +2,7 @@ import { Link } from "react-router";
 import { uiText } from "~/text/en/ui";
 import { PART_SHAPES, type PartShape } from "./part-shapes";
 
-export type PartState = "good" | "watch" | "limit" | "held" | "to-check";
+type PartState = "good" | "watch" | "limit" | "held" | "to-check";
 
 export interface AirPathPart {
   key: string;

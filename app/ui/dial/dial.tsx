@@ -9,7 +9,7 @@ import { DialLegend } from "./dial-legend";
 import { StepButton } from "./step-button";
 import { useDial } from "./use-dial";
 
-export interface DialVerdict {
+interface DialVerdict {
   tone: NoticeTone;
   /** "Inside 19 to 23." */
   title: string;
@@ -56,7 +56,7 @@ export function Dial(props: DialProps) {
         }
         onKeyDown={dial.onKeyDown}
         {...dial.drag}
-        className="mx-auto max-w-80 cursor-grab touch-none rounded-full active:cursor-grabbing"
+        className="mx-auto max-w-[min(20rem,max(31svh,13rem))] cursor-grab touch-none rounded-full active:cursor-grabbing"
       >
         <DialFace
           vacuum={vacuum}
@@ -87,7 +87,7 @@ export function Dial(props: DialProps) {
             aria-label={words.typed(label, scale.unit)}
             value={dial.typed}
             onChange={(event) => dial.type(event.target.value)}
-            className="w-[2.3em] min-w-0 bg-transparent text-right text-[length:min(2.75rem,15vw)] leading-tight font-bold tabular-nums placeholder:text-mute"
+            className="w-[2.3em] min-w-0 bg-transparent text-right text-reading font-bold tabular-nums placeholder:text-mute"
           />
           <span className="text-lg text-mute">{scale.unit}</span>
         </label>

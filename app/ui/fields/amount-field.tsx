@@ -15,7 +15,7 @@ export function AmountField({
   return (
     <div>
       <Field field={field} label={label} hint={hint} optional={optional}>
-        <div className="flex gap-2">
+        <div className="flex flex-wrap gap-2">
           <input
             key={field.key}
             type="text"
@@ -23,7 +23,7 @@ export function AmountField({
             autoComplete="off"
             defaultValue={startOf(field)}
             {...controlProps(field, hint)}
-            className={`${CONTROL} w-full min-w-0 max-w-48 flex-1 tabular-nums`}
+            className={`${CONTROL} min-w-0 max-w-48 flex-1 basis-24 tabular-nums`}
           />
           {units.length === 1 ? (
             <span className="self-center text-mute">

@@ -31,7 +31,7 @@ export function FieldFaults({ field }: { field: FieldShape }) {
   );
 }
 
-export function FieldHint({ field, hint }: { field: FieldShape; hint: ReactNode }) {
+function FieldHint({ field, hint }: { field: FieldShape; hint: ReactNode }) {
   if (!hint) return null;
   return (
     <p id={field.descriptionId} className="mb-1.5 text-sm text-mute">
@@ -73,6 +73,7 @@ export function FieldGroup({
     <fieldset
       id={field.id}
       tabIndex={-1}
+      className="min-w-0"
       aria-describedby={isFaulty(field) ? field.errorId : undefined}
     >
       <legend className="mb-1 font-bold">
