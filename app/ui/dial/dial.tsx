@@ -56,7 +56,7 @@ export function Dial(props: DialProps) {
         }
         onKeyDown={dial.onKeyDown}
         {...dial.drag}
-        className="mx-auto max-w-[min(20rem,max(31svh,13rem))] cursor-grab touch-none rounded-full active:cursor-grabbing"
+        className="mx-auto max-w-[min(20rem,max(30svh,13rem))] cursor-grab touch-none rounded-full active:cursor-grabbing"
       >
         <DialFace
           vacuum={vacuum}
@@ -73,7 +73,7 @@ export function Dial(props: DialProps) {
         shown={showUncertainty}
         onToggle={() => setShowUncertainty(!showUncertainty)}
       />
-      <div className="mt-3 flex flex-wrap items-center justify-between gap-3 @3xs:flex-nowrap">
+      <div className="mt-1 flex flex-wrap items-center justify-between gap-3 @3xs:flex-nowrap">
         <StepButton label={words.less(`${step} ${scale.unit}`)} onStep={() => dial.move(-1)}>
           −
         </StepButton>
