@@ -60,10 +60,10 @@ export default function handleRequest(
 export function handleError(error: unknown, { request }: { request: Request }): void {
   if (request.signal.aborted) return;
   const path = loggedPath(new URL(request.url).pathname);
-  console.error(JSON.stringify({ level: "error", path, error: describe(error) }));
+  console.error(JSON.stringify({ level: "error", path, error: wordless(error) }));
 }
 
-function describe(error: unknown): string {
+function wordless(error: unknown): string {
   if (!(error instanceof Error)) return "not an Error";
   // A database error's message carries its parameters, which may be personal.
   const where = error.stack?.split("\n").find((line) => line.trim().startsWith("at ")) ?? "";

@@ -6,7 +6,7 @@ import type { Check } from "~/trade/sheet/check";
 import { allChecks, dueChecks } from "~/trade/sheet/due-checks";
 import { judgeAnswers, type WalkContext } from "~/trade/sheet/judge-answers";
 import { toSi } from "~/trade/units";
-import { goodAnswers } from "./good-answers";
+import { goodAnswers } from "../../fixtures/good-answers";
 import { gallons, grease, portable, septic, sheetOf, type TestTruck, towed } from "./trucks";
 
 interface Day {

@@ -43,13 +43,13 @@ async function reencode(bytes: Uint8Array) {
       const { format } = await sharp(bytes, options).metadata();
       if (!format || !TYPES.has(format)) return null;
       const upright = sharp(bytes, options).autoOrient();
-      const fit = (edge: number) =>
+      const scaled = (edge: number) =>
         upright
           .clone()
           .resize({ width: edge, height: edge, fit: "inside", withoutEnlargement: true })
           .jpeg({ quality: 82 })
           .toBuffer({ resolveWithObject: true });
-      return { large: await fit(LONG_EDGE), thumb: await fit(THUMB_EDGE) };
+      return { large: await scaled(LONG_EDGE), thumb: await scaled(THUMB_EDGE) };
     } catch {
       return null;
     }

@@ -1,0 +1,29 @@
+import { requirePermission } from "~/auth/require-permission";
+import { dbOf } from "~/context";
+import { type PhotoOutcome, storePhoto } from "~/domain/photos/store-photo";
+import { problem } from "~/http/problem";
+import { storage } from "~/services/storage";
+import { apiText } from "~/text/en/api";
+import type { Route } from "./+types/photo";
+
+const REFUSED: Record<Exclude<PhotoOutcome["state"], "stored">, [status: number, title: string]> = {
+  "not-found": [404, apiText.photoUnknown],
+  "not-yours": [404, apiText.photoUnknown],
+  "other-picture": [422, apiText.photoHash],
+  "not-a-picture": [415, apiText.photoType],
+};
+
+/** PUT /api/v1/photos/:id: the bytes of a photo that a record promised. */
+export async function action({ request, params, context }: Route.ActionArgs) {
+  const actor = requirePermission(context, "photo.put");
+  if (request.method !== "PUT") return problem(405, "method", { title: apiText.method });
+  const bytes = new Uint8Array(await request.arrayBuffer());
+  const outcome = await storePhoto(dbOf(context), actor, storage(), { id: params.id, bytes });
+  if (outcome.state !== "stored") {
+    const [status, title] = REFUSED[outcome.state];
+    return problem(status, outcome.state, { title });
+  }
+  return Response.json(outcome, {
+    headers: { "Keypeg-Receipt": outcome.id, "Cache-Control": "no-store" },
+  });
+}
