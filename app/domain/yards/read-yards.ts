@@ -49,4 +49,4 @@ export async function listYards(db: Db, actor: Actor) {
     .groupBy(yards.carrierId, yards.id)
     .orderBy(asc(yards.name), asc(yards.id));
 }
-export type YardRow = Awaited<ReturnType<typeof listYards>>[number];
+type YardRow = Awaited<ReturnType<typeof listYards>>[number];

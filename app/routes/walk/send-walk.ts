@@ -2,7 +2,7 @@ import type { StandingWord } from "~/trade/standing/standing";
 import type { WalkToSend } from "./read-walk";
 
 export type SentWalk =
-  | { state: "sent"; standing: StandingWord; missing: number; photosLost: number }
+  | { state: "sent"; standing: StandingWord; missing: string[]; photosLost: number }
   | { state: "refused"; faults: string[] }
   | { state: "no-signal" };
 
@@ -42,5 +42,5 @@ export async function sendWalk(walk: WalkToSend, signedAt: number): Promise<Sent
     const stored = await send(`/api/v1/photos/${id}`, id, { method: "PUT", body: file });
     if (!stored?.ok) photosLost += 1;
   }
-  return { state: "sent", standing: said.standing, missing: said.missing.length, photosLost };
+  return { state: "sent", standing: said.standing, missing: said.missing, photosLost };
 }

@@ -1,7 +1,7 @@
 import { type MouseEvent, useState } from "react";
 import { cautions } from "~/text/en/cautions";
 import { loop } from "~/text/en/loop";
-import { tagText, uiText } from "~/text/en/ui";
+import { tagText } from "~/text/en/ui";
 import type { Check, Station } from "~/trade/sheet/check";
 import { Button } from "~/ui/button";
 import { Caution } from "~/ui/caution";
@@ -106,7 +106,7 @@ export function StationChecks({ station }: { station: Station }) {
       <p className="text-mute">{station.engine}</p>
       <div className="my-3 space-y-2">
         {shown.map((key) => (
-          <Caution key={key} shape={cautions[key].shape} title={uiText.caution[cautions[key].shape]}>
+          <Caution key={key} shape={cautions[key].shape} title={cautions[key].title}>
             {cautions[key].text}
           </Caution>
         ))}

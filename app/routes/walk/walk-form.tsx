@@ -37,7 +37,7 @@ export function WalkForm({ truckId, walkId, sheetHash, stations, driver }: WalkF
     if (outcome.state === "sent") await revalidator.revalidate();
   }
 
-  if (sent?.state === "sent") return <WalkSent sent={sent} />;
+  if (sent?.state === "sent") return <WalkSent sent={sent} stations={stations} />;
   return (
     <section aria-labelledby="sheet">
       <h2 id="sheet" className="mb-4 text-2xl font-bold">
@@ -74,14 +74,34 @@ export function WalkForm({ truckId, walkId, sheetHash, stations, driver }: WalkF
   );
 }
 
-function WalkSent({ sent }: { sent: Extract<SentWalk, { state: "sent" }> }) {
+function WalkSent({
+  sent,
+  stations,
+}: {
+  sent: Extract<SentWalk, { state: "sent" }>;
+  stations: Station[];
+}) {
+  const missing = stations.flatMap((station) =>
+    station.checks
+      .filter((check) => sent.missing.includes(check.key))
+      .map((check) => `${station.label}: ${check.label}`),
+  );
   return (
     <section aria-labelledby="sent">
-      <Notice announce tone={sent.missing > 0 ? "limit" : "good"}>
+      <Notice announce tone={missing.length > 0 ? "limit" : "good"}>
         <h2 id="sent" className="font-bold">
           {loop.walk.receipt(standingText[sent.standing])}
         </h2>
-        {sent.missing > 0 && <p>{loop.walk.incomplete(sent.missing)}</p>}
+        {missing.length > 0 && (
+          <>
+            <p>{loop.walk.incomplete(missing.length)}</p>
+            <ul className="list-disc pl-5">
+              {missing.map((line) => (
+                <li key={line}>{line}</li>
+              ))}
+            </ul>
+          </>
+        )}
         {sent.photosLost > 0 && <p>{loop.walk.photoNotSent}</p>}
       </Notice>
     </section>

@@ -1,0 +1,183 @@
+import { readFileSync } from "node:fs";
+import { expect, type Page, test } from "@playwright/test";
+import sharp from "sharp";
+import { signIn } from "./people";
+
+const HOST = "tallowcreek.example";
+const UNIT = "T-104";
+const axe = readFileSync("node_modules/axe-core/axe.min.js", "utf8");
+
+/** Axe finds nothing, by day and by night. */
+async function expectAccessible(page: Page) {
+  for (const colorScheme of ["light", "dark"] as const) {
+    await page.emulateMedia({ colorScheme });
+    const context = page.context();
+    await page.evaluate(axe).catch(async () => {
+      // The page's own policy forbids eval; the script is added from outside it.
+      await context.addInitScript(axe);
+      await page.reload();
+    });
+    const found = await page.evaluate(async () => {
+      const runner = (
+        window as unknown as {
+          axe: { run(): Promise<{ violations: { id: string; nodes: { html: string }[] }[] }> };
+        }
+      ).axe;
+      return (await runner.run()).violations.map(({ id, nodes }) => `${id}: ${nodes[0]?.html}`);
+    });
+    expect(found, `${page.url()} ${colorScheme}`).toEqual([]);
+  }
+  await page.emulateMedia({ colorScheme: null });
+}
+
+async function fillWalk(page: Page, name: string) {
+  for (const station of await page.getByRole("group").all()) {
+    const good = station.getByRole("button", { name: "Seen, all good" });
+    if ((await good.count()) > 0) await good.click();
+  }
+  const numbers: [RegExp, string][] = [
+    [/^air lost.*psi/i, "2"],
+    [/^load aboard/i, "0"],
+    [/hours.*, h$/i, "1300"],
+    [/odometer.*, mi$/i, "120500"],
+    [/speed.*, rpm$/i, "1050"],
+    [/, inHg$/i, "21"],
+  ];
+  for (const [label, value] of numbers) {
+    for (const box of await page.getByRole("textbox", { name: label }).all()) await box.fill(value);
+  }
+  for (const box of await page.getByRole("textbox", { name: /^(caps|sight)/i }).all()) {
+    const hint = (await box.getAttribute("aria-describedby")) ?? "";
+    const words =
+      (await page.locator(`#${CSS_escape(hint.split(" ").at(-1) ?? "")}`).textContent()) ?? "";
+    await box.fill(words.match(/\d+/)?.[0] ?? "0");
+  }
+  for (const box of await page.getByRole("checkbox", { name: "Heard it open" }).all())
+    await box.check();
+  await page.getByLabel(/name/i).last().fill(name);
+}
+
+function CSS_escape(id: string): string {
+  return id.replace(/([^a-zA-Z0-9_-])/g, "\\$1");
+}
+
+async function handOver(page: Page, driver: string) {
+  await page.goto(`/board/${UNIT}`);
+  const form = page.getByRole("form", { name: "Hand over the key" });
+  await form.getByRole("combobox", { name: "Driver" }).selectOption({ label: driver });
+  await form.getByRole("textbox", { name: "Run" }).fill("Run 31, grease traps");
+  for (const need of ["Off-load by pressure", "Towing", "Hazmat"]) {
+    await form.getByRole("group", { name: need }).getByRole("radio", { name: "No" }).check();
+  }
+  await form.getByRole("textbox", { name: /vacuum/i }).fill("18");
+  await form.getByRole("textbox", { name: /load/i }).fill("2000");
+  await form.getByRole("textbox", { name: /hose/i }).fill("100");
+  await form.getByRole("button", { name: "Hand over the key" }).click();
+}
+
+test("the loop: tagged, refused, signed off, refused, acknowledged, handed over, and not to a stranger", async ({
+  browser,
+}) => {
+  const driverA = await signIn(browser, `lena.marsh@${HOST}`);
+  const dispatcher = await signIn(browser, `desmond.achterberg@${HOST}`);
+  const mechanic = await signIn(browser, `ruth.okafor@${HOST}`);
+
+  await test.step("driver A walks the truck and tags it red, with a photo", async () => {
+    await driverA.goto(`/walk/${UNIT}`);
+    const mirror = driverA.getByRole("combobox", { name: /^Rear door/ }).first();
+    const red = mirror.locator("option", { hasText: "(red tag)" }).first();
+    await mirror.selectOption((await red.getAttribute("value")) ?? "");
+    const picture = sharp({
+      create: { width: 640, height: 480, channels: 3, background: "#b01e28" },
+    });
+    await driverA
+      .locator('input[type="file"]')
+      .first()
+      .setInputFiles({
+        name: "door.jpg",
+        mimeType: "image/jpeg",
+        buffer: await picture.jpeg().toBuffer(),
+      });
+    await fillWalk(driverA, "Lena Marsh");
+    await driverA.getByRole("button", { name: "Sign the walk" }).click();
+    await expect(driverA.getByText("The walk is in. The truck is now: Held.")).toBeVisible();
+    await expect(driverA.getByText("A photo did not go through")).toHaveCount(0);
+    await expect(driverA.getByRole("region", { name: /The walk is in/ })).not.toContainText(
+      "clears nothing",
+    );
+    await expectAccessible(driverA);
+  });
+
+  await test.step("dispatcher B is refused, with reasons", async () => {
+    await handOver(dispatcher, "Lena Marsh");
+    await expect(dispatcher.getByRole("alert")).toContainText("The key stays on the peg");
+    await expect(dispatcher.getByRole("alert")).toContainText("Red tag: Rear door");
+    await expectAccessible(dispatcher);
+  });
+
+  await test.step("A has no bench, and the server refuses A's sign-off", async () => {
+    const answer = await driverA.goto("/bench");
+    expect(answer?.status()).toBe(403);
+    await mechanic.goto("/bench");
+    const tag = mechanic.getByRole("article").filter({ hasText: `${UNIT}: Rear door` });
+    const form = {
+      id: crypto.randomUUID(),
+      tagId: await tag.locator('input[name="tagId"]').inputValue(),
+      kind: "repaired",
+      work: "adjusted",
+      signature: "Lena Marsh",
+    };
+    const origin = new URL(mechanic.url()).origin;
+    const refused = await driverA.request.post("/bench", { form, headers: { Origin: origin } });
+    expect(refused.status()).toBe(403);
+    await mechanic.reload();
+    await expect(tag).toHaveCount(1);
+  });
+
+  await test.step("mechanic C sees the photo and signs off", async () => {
+    await mechanic.goto("/bench");
+    const tag = mechanic.getByRole("article").filter({ hasText: `${UNIT}: Rear door` });
+    const photo = tag.getByRole("img", { name: "Photo 1" });
+    await expect(photo).toBeVisible();
+    expect(await photo.evaluate((image) => (image as HTMLImageElement).naturalWidth)).toBe(320);
+    await expectAccessible(mechanic);
+    await tag.getByText("Sign off", { exact: true }).first().click();
+    await tag.getByRole("radio", { name: "Repaired" }).check();
+    await tag.getByRole("combobox", { name: "What was done" }).selectOption("replaced");
+    await tag.getByRole("textbox", { name: /name/i }).fill("Ruth Okafor");
+    await tag.getByRole("button", { name: "Sign off" }).click();
+    await expect(mechanic.getByText("Signed off.")).toBeVisible();
+  });
+
+  await test.step("B is refused again: not acknowledged", async () => {
+    await handOver(dispatcher, "Lena Marsh");
+    await expect(dispatcher.getByRole("alert")).toContainText("has not acknowledged one thing");
+  });
+
+  await test.step("A acknowledges", async () => {
+    await driverA.goto(`/walk/${UNIT}`);
+    await driverA.getByLabel(/name/i).first().fill("Lena Marsh");
+    await driverA.getByRole("button", { name: "I have seen this" }).click();
+    await expect(driverA.getByText("nothing was signed off since your last look")).toBeVisible();
+  });
+
+  await test.step("B is refused for driver D, who has neither walked nor taken over", async () => {
+    await handOver(dispatcher, "Petra Solberg");
+    await expect(dispatcher.getByRole("alert")).toContainText("has no walk on this truck");
+  });
+
+  await test.step("B hands A the key, and takes it back", async () => {
+    await handOver(dispatcher, "Lena Marsh");
+    await expect(dispatcher.getByText("The key is handed over.")).toBeVisible();
+    await expect(dispatcher.getByRole("heading", { name: UNIT })).toBeVisible();
+    await dispatcher.getByRole("radio", { name: "Empty" }).check();
+    await dispatcher.getByRole("button", { name: "Take the key back" }).click();
+    await expect(dispatcher.getByText("The key is back on its peg.")).toBeVisible();
+  });
+});
+
+test("the other carrier sees none of it", async ({ browser }) => {
+  const stranger = await signIn(browser, "una.greer@harrowbend.example");
+  const answer = await stranger.goto(`/board/${UNIT}`);
+  expect(answer?.status()).toBe(404);
+});

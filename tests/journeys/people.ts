@@ -1,0 +1,45 @@
+import { type Browser, expect, type Page } from "@playwright/test";
+
+const MAIL_PAGE = process.env.KEYPEG_TEST_MAIL_PAGE ?? "";
+
+interface Received {
+  id: string;
+  subject: string;
+  text: string;
+  to: { address: string }[];
+}
+
+async function codeFor(email: string, after: Set<string>): Promise<string> {
+  let code = "";
+  await expect
+    .poll(async () => {
+      const mails = (await (await fetch(`${MAIL_PAGE}email`)).json()) as Received[];
+      const mail = mails.find(
+        (one) => !after.has(one.id) && one.to.some((to) => to.address === email),
+      );
+      code = mail?.text.match(/\b\d{6}\b/)?.[0] ?? "";
+      return code;
+    })
+    .not.toBe("");
+  return code;
+}
+
+/** A person in a browser of their own, signed in by the code in their mail. A console error fails the test. */
+export async function signIn(browser: Browser, email: string): Promise<Page> {
+  const context = await browser.newContext({ viewport: { width: 412, height: 915 } });
+  const page = await context.newPage();
+  page.on("console", (message) => {
+    // A refusal is an answer with a 4xx status, which the browser also writes to its console.
+    const refused = message.text().startsWith("Failed to load resource");
+    if (message.type() === "error" && !refused) throw new Error(message.text());
+  });
+  const before = (await (await fetch(`${MAIL_PAGE}email`)).json()) as Received[];
+  await page.goto("/sign-in");
+  await page.getByRole("textbox", { name: /e-mail/i }).fill(email);
+  await page.locator("main").getByRole("button").first().click();
+  const code = await codeFor(email, new Set(before.map((mail) => mail.id)));
+  await page.getByRole("textbox", { name: /code/i }).fill(code);
+  await page.locator("main").getByRole("button").first().click();
+  await expect(page).not.toHaveURL(/sign-in/);
+  return page;
+}
