@@ -4,7 +4,7 @@ export default defineConfig({
   testDir: "tests/journeys",
   outputDir: ".data/test/journeys",
   workers: 1,
-  timeout: 120_000,
+  timeout: 90_000,
   expect: { timeout: 15_000 },
   use: {
     baseURL: process.env.KEYPEG_ORIGIN,

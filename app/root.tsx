@@ -4,6 +4,7 @@ import { Links, Meta, Outlet, Scripts, ScrollRestoration } from "react-router";
 import type { Route } from "./+types/root";
 import { crossSiteMiddleware } from "./auth/cross-site";
 import { sessionMiddleware } from "./auth/session";
+import { RootError } from "./ui/root-error";
 import { ThemeScript } from "./ui/theme-switch";
 
 export const middleware: Route.MiddlewareFunction[] = [crossSiteMiddleware, sessionMiddleware];
@@ -31,4 +32,8 @@ export function Layout({ children }: { children: ReactNode }) {
 
 export default function App() {
   return <Outlet />;
+}
+
+export function ErrorBoundary({ error }: Route.ErrorBoundaryProps) {
+  return <RootError error={error} />;
 }

@@ -84,9 +84,9 @@ test("the loop: tagged, refused, signed off, refused, acknowledged, handed over,
 
   await test.step("driver A walks the truck and tags it red, with a photo", async () => {
     await driverA.goto(`/walk/${UNIT}`);
-    const mirror = driverA.getByRole("combobox", { name: /^Rear door/ }).first();
-    const red = mirror.locator("option", { hasText: "(red tag)" }).first();
-    await mirror.selectOption((await red.getAttribute("value")) ?? "");
+    const steering = driverA.getByRole("combobox", { name: /^Steering parts/ }).first();
+    const red = steering.locator("option", { hasText: "(red tag)" }).first();
+    await steering.selectOption((await red.getAttribute("value")) ?? "");
     const picture = sharp({
       create: { width: 640, height: 480, channels: 3, background: "#b01e28" },
     });
@@ -94,7 +94,7 @@ test("the loop: tagged, refused, signed off, refused, acknowledged, handed over,
       .locator('input[type="file"]')
       .first()
       .setInputFiles({
-        name: "door.jpg",
+        name: "steering.jpg",
         mimeType: "image/jpeg",
         buffer: await picture.jpeg().toBuffer(),
       });
@@ -111,7 +111,7 @@ test("the loop: tagged, refused, signed off, refused, acknowledged, handed over,
   await test.step("dispatcher B is refused, with reasons", async () => {
     await handOver(dispatcher, "Lena Marsh");
     await expect(dispatcher.getByRole("alert")).toContainText("The key stays on the peg");
-    await expect(dispatcher.getByRole("alert")).toContainText("Red tag: Rear door");
+    await expect(dispatcher.getByRole("alert")).toContainText("Red tag: Steering parts");
     await expectAccessible(dispatcher);
   });
 
@@ -119,7 +119,7 @@ test("the loop: tagged, refused, signed off, refused, acknowledged, handed over,
     const answer = await driverA.goto("/bench");
     expect(answer?.status()).toBe(403);
     await mechanic.goto("/bench");
-    const tag = mechanic.getByRole("article").filter({ hasText: `${UNIT}: Rear door` });
+    const tag = mechanic.getByRole("article").filter({ hasText: `${UNIT}: Steering parts` });
     const form = {
       id: crypto.randomUUID(),
       tagId: await tag.locator('input[name="tagId"]').inputValue(),
@@ -136,7 +136,7 @@ test("the loop: tagged, refused, signed off, refused, acknowledged, handed over,
 
   await test.step("mechanic C sees the photo and signs off", async () => {
     await mechanic.goto("/bench");
-    const tag = mechanic.getByRole("article").filter({ hasText: `${UNIT}: Rear door` });
+    const tag = mechanic.getByRole("article").filter({ hasText: `${UNIT}: Steering parts` });
     const photo = tag.getByRole("img", { name: "Photo 1" });
     await expect(photo).toBeVisible();
     expect(await photo.evaluate((image) => (image as HTMLImageElement).naturalWidth)).toBe(320);

@@ -49,4 +49,3 @@ export async function listYards(db: Db, actor: Actor) {
     .groupBy(yards.carrierId, yards.id)
     .orderBy(asc(yards.name), asc(yards.id));
 }
-type YardRow = Awaited<ReturnType<typeof listYards>>[number];
