@@ -75,7 +75,10 @@ export function reasonText(reason: Reason | GateReason): Told {
         clears: "The driver acknowledges it.",
       };
     case "limit":
-      return { why: limitText(reason.limit), clears: "The tag behind it is signed off." };
+      return {
+        why: limitText(reason.limit),
+        clears: "The tag behind it is signed off, or the run-up is done in a new walk.",
+      };
     case "already-out":
       return { why: "The key is out already.", clears: "It comes back to the peg." };
     case "driver-has-no-walk":
