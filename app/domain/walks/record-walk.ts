@@ -84,7 +84,13 @@ function tagRows(body: WalkBody, judged: Judgement, byKey: Map<string, Check>) {
     const raised = sent && colourRank(sent.colour) > colourRank(proposal.colour);
     const colour = raised ? sent.colour : proposal.colour;
     const limit = colour === "yellow" ? proposal.limit : null;
-    return { ...proposal, id: sent?.id ?? uuidv7(), colour, limit, note: sent?.note ?? null };
+    return {
+      ...proposal,
+      id: sent?.id ?? uuidv7(),
+      colour,
+      limit,
+      note: sent?.note ?? proposal.note,
+    };
   });
   const used = new Set(proposed.map((tag) => tag.id));
   const beside = body.tags
