@@ -32,6 +32,8 @@ export interface RequiredTest {
   test: DatedTest;
   /** Null: the carrier enters the date on the paper. */
   everyMonths: number | null;
+  /** Set by law: without one on file the unit does not go. */
+  byLaw: boolean;
   source: string;
 }
 
@@ -46,7 +48,12 @@ function tankTests(tank: TankService): RequiredTest[] {
   const { insulated = false, lined = false, corrosiveToTank = false, noManhole = false } = tank;
   const rearLoaded = tank.loadedByVacuum && tank.fullOpeningRear;
   const yearlyPressure = insulated && (noManhole || lined);
-  const every = (test: DatedTest, everyMonths: number) => ({ test, everyMonths, source: TABLE });
+  const every = (test: DatedTest, everyMonths: number) => ({
+    test,
+    everyMonths,
+    byLaw: true,
+    source: TABLE,
+  });
   const tests = [
     every("external-visual", rearLoaded ? 6 : 12),
     every("internal-visual", insulated || corrosiveToTank ? 12 : 60),
@@ -61,12 +68,17 @@ function tankTests(tank: TankService): RequiredTest[] {
 /** The dated tests of one unit, with the interval of each and where it comes from. */
 export function requiredTests(kind: UnitKind, tank: TankService | null): RequiredTest[] {
   const tests: RequiredTest[] = [
-    { test: "annual-inspection", everyMonths: 12, source: "49 CFR 396.17" },
+    { test: "annual-inspection", everyMonths: 12, byLaw: true, source: "49 CFR 396.17" },
     ...(tank ? tankTests(tank) : []),
-    { test: "permit", everyMonths: null, source: "the carrier's permit" },
+    { test: "permit", everyMonths: null, byLaw: false, source: "the carrier's permit" },
   ];
   if (kind === "powered") {
-    tests.push({ test: "extinguisher", everyMonths: 12, source: "common practice" });
+    tests.push({
+      test: "extinguisher",
+      everyMonths: 12,
+      byLaw: false,
+      source: "common practice",
+    });
   }
   return tests;
 }

@@ -3,6 +3,10 @@
  * at the yard is decided elsewhere.
  */
 
+/** Checks done less often than daily: by drivers in a walk, and by the shop at the bench. */
+export const ROUND_KINDS = ["weekly", "weekly-shop", "monthly"] as const;
+export type RoundKind = (typeof ROUND_KINDS)[number];
+
 const DAY_MS = 86_400_000;
 const DAY_FORM = /^(\d{4})-(\d{2})-(\d{2})$/;
 

@@ -3,7 +3,7 @@ import { v7 as uuidv7 } from "uuid";
 import type { Db } from "~/db/client";
 import { carriers, feedHeads, policies, yards } from "~/db/schema/carriers";
 import { memberships, people } from "~/db/schema/people";
-import { fittings, trucks } from "~/db/schema/trucks";
+import { datedTests, fittings, trucks } from "~/db/schema/trucks";
 import type { Actor, Role } from "~/domain/actor";
 import { DEFAULT_POLICY, type PolicySettings } from "~/domain/policy/settings";
 import type { Clock } from "~/services/clock";
@@ -73,6 +73,13 @@ export async function makePerson(
   return { carrierId: carrier.carrierId, personId, name, roles, certifier, yardId: null };
 }
 
+/** The least a truck is built of for a gate that asks for nothing but its tags and walks. */
+const GATE_FITTINGS: [FittingKind, FittingAttributes][] = [
+  ["pump", {}],
+  ["pressure-relief", {}],
+  ["hitch", {}],
+];
+
 /** What a plain three-thousand-gallon truck carries; enough for a whole check sheet. */
 const PLAIN_FITTINGS: [FittingKind, FittingAttributes][] = [
   ["tank", { volumeL: 11356, maxPressurePa: 172_369, maxVacuumPa: 94_000 }],
@@ -113,7 +120,7 @@ export async function makeTruck(
   db: Db,
   carrier: TestCarrier,
   clock: Clock,
-  more: { unitNumber?: string; bare?: boolean } = {},
+  more: { unitNumber?: string; bare?: boolean; untested?: boolean } = {},
 ): Promise<{ carrierId: string; truckId: string; unitNumber: string }> {
   serial += 1;
   const truckId = uuidv7();
@@ -127,17 +134,27 @@ export async function makeTruck(
     yardId: carrier.yardId,
     createdAt,
   });
-  if (!more.bare) {
-    await db.insert(fittings).values(
-      PLAIN_FITTINGS.map(([kind, attributes]) => ({
-        carrierId: carrier.carrierId,
-        id: uuidv7(),
-        truckId,
-        kind,
-        attributes,
-        fittedAt: createdAt,
-      })),
-    );
+  const carried = more.bare ? GATE_FITTINGS : [...PLAIN_FITTINGS, ["hitch", {}] as const];
+  await db.insert(fittings).values(
+    carried.map(([kind, attributes]) => ({
+      carrierId: carrier.carrierId,
+      id: uuidv7(),
+      truckId,
+      kind,
+      attributes,
+      fittedAt: createdAt,
+    })),
+  );
+  if (!more.untested) {
+    await db.insert(datedTests).values({
+      carrierId: carrier.carrierId,
+      id: uuidv7(),
+      truckId,
+      kind: "annual-inspection",
+      dueOn: "2099-12-31",
+      recordedBy: uuidv7(),
+      recordedAt: createdAt,
+    });
   }
   return { carrierId: carrier.carrierId, truckId, unitNumber };
 }

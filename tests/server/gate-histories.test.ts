@@ -5,7 +5,7 @@ import { expect, test } from "vitest";
 import type { Db } from "~/db/client";
 import { clearances } from "~/db/schema/handovers";
 import { runLimits, signOffs, tags } from "~/db/schema/tags";
-import { datedTests, sheetVersions, trucks } from "~/db/schema/trucks";
+import { datedTests, fittings, sheetVersions, trucks } from "~/db/schema/trucks";
 import { walks } from "~/db/schema/walks";
 import { acknowledge } from "~/domain/acknowledgements/acknowledge";
 import type { Actor } from "~/domain/actor";
@@ -278,6 +278,7 @@ class History {
   }
 
   private sheetVersion = 1;
+  private hasRelief = true;
   private async sheetOnce(setupVersion: number) {
     if (setupVersion === this.sheetVersion) return;
     this.sheetVersion = setupVersion;
@@ -377,6 +378,27 @@ class History {
       this.events.push({ at: this.now, what: "back", by: out.by, endsDay: rest.endsDay });
   }
 
+  /** The pressure relief comes off the truck, or goes back on. */
+  private async turnRelief() {
+    const { db, key, clock } = this;
+    this.hasRelief = !this.hasRelief;
+    const { hasRelief } = this;
+    const change = async ({ tx, now }: { tx: Db; now: Date }) => {
+      await tx
+        .update(fittings)
+        .set({ removedAt: hasRelief ? null : now })
+        .where(
+          and(
+            eq(fittings.carrierId, key.carrierId),
+            eq(fittings.truckId, key.truckId),
+            eq(fittings.kind, "pressure-relief"),
+          ),
+        );
+    };
+    await changeTruck(db, key, change, { clock, setup: true });
+    this.events.push({ at: this.now, what: "fitting", hasRelief });
+  }
+
   async take(s: Step): Promise<void> {
     this.clock.turn(1000);
     const { db, key, clock } = this;
@@ -404,8 +426,7 @@ class History {
         this.clock.turn(s.ms);
         return;
       case "fitting":
-        await changeTruck(db, key, async () => undefined, { clock, setup: true });
-        this.events.push({ at: this.now, what: "fitting" });
+        await this.turnRelief();
         return;
       case "service":
         await changeTruck(

@@ -49,7 +49,7 @@ export type ModelEvent =
       maxVacuumPa: number | null;
     }
   | { at: number; what: "saw"; by: string; ids: string[] }
-  | { at: number; what: "fitting" }
+  | { at: number; what: "fitting"; hasRelief: boolean }
   | { at: number; what: "service"; on: boolean }
   | { at: number; what: "policy"; walkHours: number }
   | { at: number; what: "test"; kind: string; holdsAt: number }
@@ -70,6 +70,7 @@ export function mayTakeKey(
   let inService = true;
   let walkHours = start.walkHours;
   let lastFitting = -1;
+  let hasRelief = true;
   let roundHoldsAt = start.roundHoldsAt;
   const testHolds: Record<string, number> = {};
   const open: Record<string, Extract<ModelEvent, { what: "tag" }>> = {};
@@ -81,7 +82,10 @@ export function mayTakeKey(
     if (event.what === "back") out = false;
     if (event.what === "service") inService = event.on;
     if (event.what === "policy") walkHours = event.walkHours;
-    if (event.what === "fitting") lastFitting = index;
+    if (event.what === "fitting") {
+      lastFitting = index;
+      hasRelief = event.hasRelief;
+    }
     if (event.what === "round") roundHoldsAt = event.holdsAt;
     if (event.what === "test") testHolds[event.kind] = event.holdsAt;
     if (event.what === "tag") open[event.id] = event;
@@ -94,6 +98,7 @@ export function mayTakeKey(
   });
 
   if (out || !inService || roundHoldsAt <= now) return false;
+  if (needs.pressure && !hasRelief) return false;
   for (const holds of Object.values(testHolds)) if (holds <= now) return false;
 
   for (const tag of Object.values(open)) {

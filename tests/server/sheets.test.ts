@@ -3,7 +3,7 @@ import { drizzle } from "drizzle-orm/mysql2";
 import { v7 as uuidv7 } from "uuid";
 import { beforeAll, expect, test } from "vitest";
 import type { Db } from "~/db/client";
-import { sheetVersions } from "~/db/schema/trucks";
+import { datedTests, sheetVersions } from "~/db/schema/trucks";
 import { walks } from "~/db/schema/walks";
 import type { Actor } from "~/domain/actor";
 import { changeTruck } from "~/domain/gate/change-truck";
@@ -53,6 +53,15 @@ async function usualTruck(more: Record<string, unknown> = {}) {
     ...more,
   });
   const { id } = value(await addTruck(testDb(), manager, input, clock));
+  await testDb().insert(datedTests).values({
+    carrierId: ours.carrierId,
+    id: uuidv7(),
+    truckId: id,
+    kind: "annual-inspection",
+    dueOn: "2099-12-31",
+    recordedBy: manager.personId,
+    recordedAt: clock.now(),
+  });
   return { carrierId: ours.carrierId, truckId: id };
 }
 

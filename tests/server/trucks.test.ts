@@ -119,11 +119,15 @@ async function setupVersion(key: { carrierId: string; truckId: string }) {
   return (await truckRow(testDb(), key)).setupVersion;
 }
 
-test("a truck is entered under its unit number in capitals, and stays on its peg until it is walked", async () => {
+test("a truck is entered under its unit number in capitals, and is held until its annual inspection is on file", async () => {
   const added = value(await addTruck(testDb(), manager, typed({ unitNumber: "  t-118 " }), clock));
   expect(added.unitNumber).toBe("T-118");
   const row = await truckRow(testDb(), { carrierId: ours.carrierId, truckId: added.id });
-  expect(row.standing).toBe("walk-due");
+  expect(row.standing).toBe("held");
+  expect(row.standingDetail?.reasons[0]).toEqual({
+    code: "test-not-on-file",
+    id: "annual-inspection",
+  });
   expect(row.gateFault).toBeNull();
   const feed = await testDb().select().from(changes).where(eq(changes.truckId, added.id));
   expect(feed.map((change) => change.kind)).toEqual(["truck", "standing"]);
@@ -477,6 +481,7 @@ test("a set point can be taken away", async () => {
 
 test("out of service holds the key, and back in service lets the walk decide", async () => {
   const { truckId } = await newTruck();
+  value(await recordDatedTest(testDb(), manager, dated(truckId), clock));
   const set = async (inService: boolean) =>
     value(await setInService(testDb(), manager, { truckId, inService }, clock)).standing;
   expect(await set(false)).toBe("held");

@@ -76,8 +76,31 @@ test("pump hours hold at the interval and its grace, counted from the last round
 test("a date set by law has no grace: it holds from the first minute after its last day", () => {
   const [test_] = testFacts(
     [{ kind: "annual-inspection", dueOn: "2026-06-30" }],
+    ["annual-inspection"],
     yard,
     DEFAULT_POLICY,
   );
   expect(new Date(test_!.holdsAt!).toISOString()).toBe("2026-07-01T06:00:00.000Z");
+});
+
+test("a test set by law that is not on file holds at once; a permit's paper only when it has a date", () => {
+  const facts = testFacts([], ["annual-inspection"], yard, DEFAULT_POLICY);
+  expect(facts).toEqual([
+    { kind: "annual-inspection", dueOn: null, warnsAt: null, holdsAt: 0, holdsAtHours: null },
+  ]);
+});
+
+test("what of the weekly round needs the shop is due by itself, warns after its grace and never holds", () => {
+  const done = [
+    { kind: "weekly", doneOn: "2026-06-08", pumpHours: null },
+    { kind: "weekly-shop", doneOn: "2026-06-01", pumpHours: null },
+  ] as const;
+  const facts = roundFacts([...done], "2026-05-01", yard, DEFAULT_POLICY, true);
+  const shop = facts.find((fact) => fact.kind === "weekly-shop");
+  expect(shop).toMatchObject({ dueOn: "2026-06-08", holdsAt: null, holdsAtHours: null });
+  expect(new Date(shop!.warnsAt!).toISOString()).toBe("2026-06-10T12:00:00.000Z");
+  expect(roundFacts([...done], "2026-05-01", yard, DEFAULT_POLICY).map((f) => f.kind)).toEqual([
+    "weekly",
+    "monthly",
+  ]);
 });

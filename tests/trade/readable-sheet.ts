@@ -70,7 +70,7 @@ export function counts(sheet: Sheet) {
     weeklyDay: dueChecks(sheet, { walkKind: "before", weeklyDue: true }).length,
     after: dueChecks(sheet, { walkKind: "after" }).length,
     takeover: dueChecks(sheet, { walkKind: "takeover" }).length,
-    weeklyShop: roundChecks(sheet, "weekly").filter((check) => check.who === "shop").length,
+    weeklyShop: roundChecks(sheet, "weekly-shop").length,
     monthlyShop: roundChecks(sheet, "monthly").length,
     all: allChecks(sheet).length,
   };

@@ -400,7 +400,9 @@ test("shop checks are the bench's: never on a driver's walk", () => {
       dueChecks(sheet, { walkKind, ...everything }).every((check) => check.who === "driver"),
     ).toBe(true);
   }
-  expect(roundChecks(sheet, "weekly").map((check) => check.key)).toContain("pump-side.coupling");
+  expect(roundChecks(sheet, "weekly-shop").map((check) => check.key)).toContain(
+    "pump-side.coupling",
+  );
   expect(roundChecks(sheet, "monthly").map((check) => check.key)).toContain("shop.hose-separator");
 });
 

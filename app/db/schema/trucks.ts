@@ -16,13 +16,14 @@ import {
   varchar,
 } from "drizzle-orm/mysql-core";
 import type { FittingAttributes, FittingKind } from "../../trade/fittings";
+import { ROUND_KINDS } from "../../trade/rounds";
 import type { StandingDetail, StandingWord } from "../../trade/standing/standing";
 import { instant, jsonOf, sha256, uuid } from "../columns";
 import { carriers, yards } from "./carriers";
 
 /**
  * A truck, or a towed unit. The columns from `gate_seq` on are the gate's: one function
- * (domain/gate/keep-gate) writes them, recomputed from the base rows, and the handover's
+ * (domain/gate/change-truck) writes them, recomputed from the base rows, and the handover's
  * UPDATE reads them.
  */
 export const trucks = mysqlTable(
@@ -190,14 +191,14 @@ export const datedTests = mysqlTable(
   ],
 );
 
-/** Weekly and monthly rounds done. */
+/** Rounds done. The weekly one is walked by drivers; what of it needs the shop has a round of its own. */
 export const rounds = mysqlTable(
   "rounds",
   {
     carrierId: uuid("carrier_id").notNull(),
     id: uuid("id").notNull(),
     truckId: uuid("truck_id").notNull(),
-    kind: mysqlEnum("kind", ["weekly", "monthly"]).notNull(),
+    kind: mysqlEnum("kind", ROUND_KINDS).notNull(),
     /** The yard's local day. */
     doneOn: date("done_on", { mode: "string" }).notNull(),
     doneAt: instant("done_at").notNull(),

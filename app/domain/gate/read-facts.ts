@@ -3,11 +3,15 @@ import type { Db } from "../../db/client";
 import { yards } from "../../db/schema/carriers";
 import { handovers, returns } from "../../db/schema/handovers";
 import { acknowledgements, runLimits, signOffs, tagChanges, tags } from "../../db/schema/tags";
-import { datedTests, fittings, rounds, trucks } from "../../db/schema/trucks";
+import { datedTests, rounds, trucks } from "../../db/schema/trucks";
 import { readings, walks } from "../../db/schema/walks";
+import type { FittingKind } from "../../trade/fittings";
+import { cannotDo } from "../../trade/sheet/cannot-do";
 import type { StandingFacts, TagFact } from "../../trade/standing/facts";
 import { hours } from "../durations";
 import type { PolicySettings } from "../policy/settings";
+import { testsFor } from "../trucks/dated-tests";
+import { readFittings } from "../trucks/read-setup";
 import { addDays, yardDay, yardInstant } from "../yard-day";
 import { roundFacts, testFacts, type YardClock } from "./due-facts";
 
@@ -22,6 +26,7 @@ const WALKS_BACK = hours(72);
 async function readTruck(db: Db, key: TruckKey) {
   const [row] = await db
     .select({
+      kind: trucks.kind,
       inService: trucks.inService,
       gateFault: trucks.gateFault,
       outHandover: trucks.outHandover,
@@ -198,7 +203,7 @@ async function readDues(db: Db, key: TruckKey) {
   return { done, newest: [...new Map(tests.map((test) => [test.kind, test])).values()] };
 }
 
-async function readMeasures(db: Db, key: TruckKey) {
+async function readPumpHours(db: Db, key: TruckKey) {
   const [hoursRow] = await db
     .select({ si: readings.si })
     .from(readings)
@@ -211,18 +216,7 @@ async function readMeasures(db: Db, key: TruckKey) {
     )
     .orderBy(desc(readings.countsFrom), desc(readings.id))
     .limit(1);
-  const [tank] = await db
-    .select({ attributes: fittings.attributes })
-    .from(fittings)
-    .where(
-      and(
-        eq(fittings.carrierId, key.carrierId),
-        eq(fittings.truckId, key.truckId),
-        eq(fittings.kind, "tank"),
-        isNull(fittings.removedAt),
-      ),
-    );
-  return { pumpHours: hoursRow?.si ?? 0, tankL: tank?.attributes.volumeL ?? null };
+  return hoursRow?.si ?? 0;
 }
 
 export interface FactsRead {
@@ -246,7 +240,12 @@ export async function readFacts(
   const seen = await readSeen(db, key, since);
   const dayEnds = await readDayEnds(db, key, now);
   const dues = await readDues(db, key);
-  const { pumpHours, tankL } = await readMeasures(db, key);
+  const pumpHours = await readPumpHours(db, key);
+  const fitted = await readFittings(db, key);
+  const has = (kind: FittingKind) => fitted.some((fitting) => fitting.kind === kind);
+  const drive = fitted.find((fitting) => fitting.kind === "drive")?.attributes.type;
+  const weeklyShop = (has("drive") || has("gearbox")) && drive !== "direct";
+  const byLaw = testsFor(truck.kind, fitted).filter((required) => required.byLaw);
   const entered = yardDay(truck.createdAt, truck.zone).day;
   return {
     tagsSeq: truck.tagsSeq,
@@ -262,14 +261,20 @@ export async function readFacts(
               driverId: truck.openDriver!,
               since: truck.openSince!.getTime(),
             },
-      tankL,
+      tankL: fitted.find((fitting) => fitting.kind === "tank")?.attributes.volumeL ?? null,
+      cannot: cannotDo(truck.kind, has),
       pumpHours,
       openTags,
       ...seen,
       walks: walkFacts,
       dayEnds,
-      rounds: roundFacts(dues.done, entered, yard, policy),
-      tests: testFacts(dues.newest, yard, policy),
+      rounds: roundFacts(dues.done, entered, yard, policy, weeklyShop),
+      tests: testFacts(
+        dues.newest,
+        byLaw.map((required) => required.test),
+        yard,
+        policy,
+      ),
     },
   };
 }

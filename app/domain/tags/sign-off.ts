@@ -3,14 +3,12 @@ import { z } from "zod";
 import type { Db } from "../../db/client";
 import { signOffs, tags } from "../../db/schema/tags";
 import { type Clock, systemClock } from "../../services/clock";
-import type { StandingWord } from "../../trade/standing/standing";
 import type { Actor } from "../actor";
-import { changeTruck } from "../gate/change-truck";
-import { once, submissionOf } from "../receipts/once";
-import { ok, type Result, refuse } from "../refusals";
+import { submissionOf } from "../receipts/once";
+import type { Result } from "../refusals";
 import { signatureSchema } from "../signature";
+import { changeTag, type TagReceipt } from "./change-tag";
 import { queueKeyFreed } from "./key-freed-mail";
-import { readOpenTag, truckOfTag } from "./open-tag";
 import { whySignerMayNot } from "./who-signs";
 
 const ends = {
@@ -37,13 +35,7 @@ export const signOffSchema = z.discriminatedUnion("kind", [
 ]);
 export type SignOffInput = z.infer<typeof signOffSchema>;
 
-export interface SignOffReceipt {
-  id: string;
-  tagId: string;
-  truckId: string;
-  signedAt: string;
-  standing: StandingWord;
-}
+export type SignOffReceipt = TagReceipt & { signedAt: string };
 
 /** K3: ends a tag. Who may is K10's; the gate follows in the same transaction. */
 export async function signOff(
@@ -54,59 +46,37 @@ export async function signOff(
 ): Promise<Result<SignOffReceipt>> {
   const { carrierId, personId } = actor;
   const sent = submissionOf("sign-off", input);
-  return once(db, actor, sent, clock, async () => {
-    const truckId = await truckOfTag(db, carrierId, input.tagId);
-    if (!truckId) return refuse("not-found");
-    const changed = await changeTruck(
-      db,
-      { carrierId, truckId },
-      async (change) => {
-        const tag = await readOpenTag(change.tx, carrierId, input.tagId);
-        if (!tag) return change.deny("already-ended");
-        const no = whySignerMayNot(actor, tag, change.policy, input.remote);
-        if (no) return change.deny(no);
-        const repaired = input.kind === "repaired" ? input : null;
-        await change.tx.insert(signOffs).values({
-          carrierId,
-          id: input.id,
-          tagId: tag.id,
-          truckId,
-          kind: input.kind,
-          work: repaired?.work ?? null,
-          parts: repaired?.parts ?? null,
-          roadTested: repaired?.roadTested ?? null,
-          reason: input.kind === "not-needed" ? input.reason : null,
-          remote: input.remote,
-          ownFinding: tag.raisedBy === personId,
-          signedBy: personId,
-          signedAt: change.now,
-          signature: input.signature,
-          hash: sent.hash,
-        });
-        await change.tx
-          .update(tags)
-          .set({ signedOffAt: change.now })
-          .where(and(eq(tags.carrierId, carrierId), eq(tags.id, tag.id), isNull(tags.signedOffAt)));
-        change.moveTags();
-        change.note("sign-off", input.id, { tagId: tag.id });
-        const receipt = (standing: StandingWord) => ({
-          id: input.id,
-          tagId: tag.id,
-          truckId,
-          signedAt: change.now.toISOString(),
-          standing,
-        });
-        change.receipt = { ...sent, personId, body: (after) => receipt(after.word) };
-        change.after(async (after) => {
-          if (tag.colour === "red" && after.gate.openReds === 0) {
-            await queueKeyFreed(change, { carrierId, truckId, tagId: tag.id, signOffId: input.id });
-          }
-        });
-        return receipt;
-      },
-      { clock },
-    );
-    if (!changed.ok) return changed;
-    return ok(changed.value.value(changed.value.standing.word));
+  return changeTag(db, actor, { sent, tagId: input.tagId, clock }, async (change, tag) => {
+    const no = whySignerMayNot(actor, tag, change.policy, input.remote);
+    if (no) return change.deny(no);
+    const { truckId } = tag;
+    const repaired = input.kind === "repaired" ? input : null;
+    await change.tx.insert(signOffs).values({
+      carrierId,
+      id: input.id,
+      tagId: tag.id,
+      truckId,
+      kind: input.kind,
+      work: repaired?.work ?? null,
+      parts: repaired?.parts ?? null,
+      roadTested: repaired?.roadTested ?? null,
+      reason: input.kind === "not-needed" ? input.reason : null,
+      remote: input.remote,
+      ownFinding: tag.raisedBy === personId,
+      signedBy: personId,
+      signedAt: change.now,
+      signature: input.signature,
+      hash: sent.hash,
+    });
+    await change.tx
+      .update(tags)
+      .set({ signedOffAt: change.now })
+      .where(and(eq(tags.carrierId, carrierId), eq(tags.id, tag.id), isNull(tags.signedOffAt)));
+    change.after(async (after) => {
+      if (tag.colour === "red" && after.gate.openReds === 0) {
+        await queueKeyFreed(change, { carrierId, truckId, tagId: tag.id, signOffId: input.id });
+      }
+    });
+    return { signedAt: change.now.toISOString() };
   });
 }

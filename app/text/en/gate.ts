@@ -62,6 +62,11 @@ export function reasonText(reason: Reason | GateReason): Told {
         why: `Past its date: ${DATED(reason.id)}.`,
         clears: "The test is done and its new date entered.",
       };
+    case "test-not-on-file":
+      return {
+        why: `Not on file: ${DATED(reason.id)}.`,
+        clears: "The office enters the date on its paper.",
+      };
     case "round-overdue":
       return {
         why: `The ${reason.id} round is past its grace.`,
@@ -97,6 +102,11 @@ export function reasonText(reason: Reason | GateReason): Told {
       return {
         why: `The run needs what a limit forbids: ${limitText(reason.limit)}.`,
         clears: "Another truck, or the tag behind it is signed off.",
+      };
+    case "not-built-for":
+      return {
+        why: `The truck is not built for this run: ${limitText(reason.limit)}.`,
+        clears: "Another truck.",
       };
     case "over-tank":
       return {

@@ -1,3 +1,4 @@
+import type { RoundKind } from "../rounds";
 import type { Check, RunUpHalf, Sheet, WalkKind } from "./check";
 
 export interface DueToday {
@@ -21,9 +22,12 @@ export function dueChecks(sheet: Sheet, due: DueToday): Check[] {
   });
 }
 
-/** All checks of a round, the shop's and the driver's, as done at the bench. */
-export function roundChecks(sheet: Sheet, cadence: "weekly" | "monthly"): Check[] {
-  return allChecks(sheet).filter((check) => check.cadence === cadence);
+/** The checks of a round as done at the bench, in walking order. */
+export function roundChecks(sheet: Sheet, round: RoundKind): Check[] {
+  return allChecks(sheet).filter(({ cadence, who }) => {
+    if (round === "monthly") return cadence === "monthly";
+    return cadence === "weekly" && (who === "shop") === (round === "weekly-shop");
+  });
 }
 
 export function allChecks(sheet: Sheet): Check[] {

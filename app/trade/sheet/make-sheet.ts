@@ -2,15 +2,9 @@ import type { Fitting } from "../fittings";
 import { type Colour, colourRank, type Limit } from "../limits";
 import type { SetPoint, SetPointReading } from "../set-points";
 import { fromSi } from "../units";
+import { cannotDo, halvesBuilt } from "./cannot-do";
 import { CATALOGUE, stationsOf } from "./catalogue";
-import {
-  type CheckEntry,
-  type LimitOf,
-  NO_PRESSURE,
-  NO_TOWING,
-  NO_VACUUM,
-  type ProblemEntry,
-} from "./catalogue-entry";
+import type { CheckEntry, LimitOf, ProblemEntry } from "./catalogue-entry";
 import type { CautionKey } from "./cautions";
 import {
   CADENCES,
@@ -19,7 +13,6 @@ import {
   COULD_NOT_CHECK,
   NOT_FITTED,
   type Problem,
-  type RunUpHalf,
   type Sheet,
   type Station,
   type StationKey,
@@ -324,17 +317,12 @@ export function makeSheet(input: SheetInput): Sheet {
     return [{ key, label: words.label, engine, caution: STATION_CAUTIONS[key] ?? null, checks }];
   });
 
-  const halves: RunUpHalf[] = [];
-  if (truck.has("pump")) halves.push("vacuum");
-  if (truck.has("pump") && truck.has("pressure-relief")) halves.push("pressure");
+  const halves = halvesBuilt(truck.has);
   const ran = new Set(stations.flatMap((station) => station.checks.map((check) => check.half)));
   const missingSetPoints = halves
     .filter((half) => !ran.has(half))
     .map((half): SetPointReading => (half === "vacuum" ? "vacuum-relief" : "pressure-relief"));
 
-  const cannot: Limit[] = [];
-  if (!halves.includes("vacuum")) cannot.push(NO_VACUUM);
-  if (!halves.includes("pressure")) cannot.push(NO_PRESSURE);
-  if (kind === "powered" && !truck.has("hitch")) cannot.push(NO_TOWING);
+  const cannot = cannotDo(kind, truck.has);
   return { format: 1, kind, stations, halves, missingSetPoints, cannot };
 }

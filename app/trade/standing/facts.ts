@@ -51,8 +51,8 @@ export interface DayEndFact {
 
 export interface DueFact {
   kind: string;
-  /** Its last day, "YYYY-MM-DD" of the yard. */
-  dueOn: string;
+  /** Its last day, "YYYY-MM-DD" of the yard; null for a test set by law that is not on file. */
+  dueOn: string | null;
   /** When it starts to hold, as an instant; null when it never holds. */
   holdsAt: number | null;
   /** When it starts to warn. */
@@ -67,6 +67,8 @@ export interface StandingFacts {
   gateFault: string | null;
   out: { handoverId: string; driverId: string; since: number } | null;
   tankL: number | null;
+  /** What the unit cannot do as it is built: in the gate, not in the word. */
+  cannot: readonly Limit[];
   pumpHours: number;
   openTags: readonly TagFact[];
   signOffs: readonly SignOffFact[];

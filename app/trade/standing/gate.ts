@@ -10,6 +10,7 @@ export type GateReason =
   | { code: "driver-has-not-acknowledged"; count: number }
   | { code: "need-unanswered"; need: "mask" | "vacuum" | "fill" | "hose" }
   | { code: "limit-against-need"; limit: Limit }
+  | { code: "not-built-for"; limit: Limit }
   | { code: "over-tank"; tankL: number };
 
 function against(limit: Limit, needs: NeedsMask): boolean {
@@ -27,7 +28,7 @@ function against(limit: Limit, needs: NeedsMask): boolean {
 
 function needReasons(
   limits: readonly Limit[],
-  tankL: number | null,
+  { tankL, cannot }: StandingFacts,
   needs: NeedsMask,
 ): GateReason[] {
   const reasons: GateReason[] = [];
@@ -37,6 +38,9 @@ function needReasons(
   if (needs.hoseMm === null) reasons.push({ code: "need-unanswered", need: "hose" });
   for (const limit of limits) {
     if (against(limit, needs)) reasons.push({ code: "limit-against-need", limit });
+  }
+  for (const limit of cannot) {
+    if (against(limit, needs)) reasons.push({ code: "not-built-for", limit });
   }
   if (tankL !== null && needs.fillL !== null && needs.fillL > Math.floor(tankL)) {
     reasons.push({ code: "over-tank", tankL });
@@ -68,5 +72,5 @@ export function gateReasons(
   else if (own.unseen.length > 0) {
     reasons.push({ code: "driver-has-not-acknowledged", count: own.unseen.length });
   }
-  return [...reasons, ...needReasons(state.limits, facts.tankL, ask.needs)];
+  return [...reasons, ...needReasons(state.limits, facts, ask.needs)];
 }

@@ -13,6 +13,7 @@ export type Reason =
   | { code: "yellow-needs-certifier"; id: string; title: string }
   | { code: "yellow-date-passed"; id: string; title: string }
   | { code: "test-passed-date"; id: string }
+  | { code: "test-not-on-file"; id: string }
   | { code: "round-overdue"; id: string }
   | { code: "walk-due" }
   | { code: "not-acknowledged"; count: number }
@@ -62,7 +63,7 @@ function limitsInForce(facts: StandingFacts, now: number): Limit[] {
 }
 
 function gateColumns(facts: StandingFacts, limits: Limit[]): GateColumns {
-  const folded = foldLimits(limits);
+  const folded = foldLimits([...limits, ...facts.cannot]);
   const yellows = facts.openTags.filter((tag) => tag.colour === "yellow" && tag.roadSafety);
   return {
     openReds: facts.openTags.filter((tag) => tag.colour === "red").length,
@@ -90,7 +91,8 @@ function holds(facts: StandingFacts, now: number): Reason[] {
     }
   }
   for (const test of facts.tests) {
-    if (test.holdsAt !== null && test.holdsAt <= now) {
+    if (test.dueOn === null) reasons.push({ code: "test-not-on-file", id: test.kind });
+    else if (test.holdsAt !== null && test.holdsAt <= now) {
       reasons.push({ code: "test-passed-date", id: test.kind });
     }
   }

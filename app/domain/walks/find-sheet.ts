@@ -1,0 +1,66 @@
+import { and, desc, eq } from "drizzle-orm";
+import { v7 as uuidv7 } from "uuid";
+import type { Db } from "../../db/client";
+import { sheetVersions } from "../../db/schema/trucks";
+import type { Sheet } from "../../trade/sheet/check";
+import { sheetSchema } from "../../trade/sheet/sheet-schema";
+import type { Actor } from "../actor";
+import type { GateChange } from "../gate/change-truck";
+import type { TruckKey } from "../gate/read-facts";
+import { sheetForTruck } from "../sheets/sheet-for-truck";
+import type { WalkBody } from "./walk-schema";
+
+export interface WalkSheet {
+  id: string;
+  setupVersion: number;
+  sheet: Sheet;
+  madeHere: boolean;
+}
+
+/** The sheet a walk was made on: today's, an older one by its hash, or one nobody here made. */
+export async function findSheet(db: Db, actor: Actor, body: WalkBody): Promise<WalkSheet | null> {
+  const { carrierId } = actor;
+  const today = await sheetForTruck(db, actor, body.truckId);
+  if (!today.ok) return null;
+  const { sheetId, hash, sheet, setupVersion } = today.value;
+  if (hash === body.sheetHash) return { id: sheetId, setupVersion, sheet, madeHere: true };
+  const [older] = await db
+    .select()
+    .from(sheetVersions)
+    .where(
+      and(
+        eq(sheetVersions.carrierId, carrierId),
+        eq(sheetVersions.truckId, body.truckId),
+        eq(sheetVersions.hash, body.sheetHash),
+      ),
+    )
+    .orderBy(desc(sheetVersions.setupVersion))
+    .limit(1);
+  if (older) return { ...older, sheet: older.body as Sheet };
+  const sent = sheetSchema.safeParse(body.sheet);
+  return {
+    id: uuidv7(),
+    setupVersion: 0,
+    sheet: sent.success ? sent.data : sheet,
+    madeHere: false,
+  };
+}
+
+/** A sheet nobody here made is kept beside its walk, which clears nothing. */
+export async function keepUnknownSheet(
+  change: GateChange,
+  key: TruckKey,
+  found: WalkSheet,
+  hash: string,
+): Promise<void> {
+  if (found.madeHere) return;
+  await change.tx.insert(sheetVersions).values({
+    ...key,
+    id: found.id,
+    hash,
+    setupVersion: found.setupVersion,
+    body: found.sheet,
+    madeHere: false,
+    createdAt: change.now,
+  });
+}

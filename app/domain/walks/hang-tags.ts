@@ -1,0 +1,136 @@
+import { and, eq, inArray } from "drizzle-orm";
+import { v7 as uuidv7 } from "uuid";
+import type { Db } from "../../db/client";
+import { tagChanges, tags } from "../../db/schema/tags";
+import { colourRank } from "../../trade/limits";
+import type { Check, Sheet } from "../../trade/sheet/check";
+import { allChecks } from "../../trade/sheet/due-checks";
+import type { Judgement, OpenTag } from "../../trade/sheet/judge-answers";
+import type { Actor } from "../actor";
+import type { GateChange } from "../gate/change-truck";
+import { readOpenTags, type TruckKey } from "../gate/read-facts";
+import type { WalkBody } from "./walk-schema";
+
+/** Tag rows of a walk: one per problem answer, and any the driver hung beside. The driver's colour may only raise. */
+function tagRows(body: WalkBody, judged: Judgement, byKey: Map<string, Check>) {
+  const proposed = judged.tags.map((proposal) => {
+    const sent = body.tags.find(
+      (tag) => tag.checkKey === proposal.checkKey && tag.problemKey === proposal.problemKey,
+    );
+    const raised = sent && colourRank(sent.colour) > colourRank(proposal.colour);
+    const colour = raised ? sent.colour : proposal.colour;
+    const limit = colour === "yellow" ? proposal.limit : null;
+    return {
+      ...proposal,
+      id: sent?.id ?? uuidv7(),
+      colour,
+      limit,
+      note: sent?.note ?? proposal.note,
+    };
+  });
+  const used = new Set(proposed.map((tag) => tag.id));
+  const beside = body.tags
+    .filter((tag) => !used.has(tag.id))
+    .map((tag) => {
+      const check = byKey.get(tag.checkKey);
+      const problem = check?.problems.find((known) => known.key === tag.problemKey);
+      return {
+        ...tag,
+        limit: tag.colour === "yellow" ? (problem?.limit ?? null) : null,
+        title: check ? `${check.label}: ${problem?.label ?? tag.problemKey}` : tag.problemKey,
+        part: check?.part ?? null,
+        fittingId: check?.fittingId ?? null,
+        roadSafety: check?.roadSafety ?? true,
+        driverFix: problem?.driverFix ?? false,
+        remote: problem?.remote ?? false,
+      };
+    });
+  return [...proposed, ...beside];
+}
+
+/** Open tags as a new finding is compared with them. */
+export async function comparableTags(tx: Db, key: TruckKey): Promise<OpenTag[]> {
+  const facts = await readOpenTags(tx, key, { zone: "UTC", shopOpensMinute: 0 });
+  if (facts.length === 0) return [];
+  const rows = await tx
+    .select({ id: tags.id, checkKey: tags.checkKey, problemKey: tags.problemKey })
+    .from(tags)
+    .where(
+      and(
+        eq(tags.carrierId, key.carrierId),
+        inArray(
+          tags.id,
+          facts.map((fact) => fact.id),
+        ),
+      ),
+    );
+  return facts.flatMap(({ id, colour, limit }) => {
+    const row = rows.find((known) => known.id === id);
+    if (!row?.checkKey || !row.problemKey) return [];
+    return [{ checkKey: row.checkKey, problemKey: row.problemKey, colour, limit }];
+  });
+}
+
+/** Writes the tags of a walk as one statement; answers with what was hung. */
+export async function hangTags(
+  change: GateChange,
+  actor: Actor,
+  body: WalkBody,
+  sheet: Sheet,
+  judged: Judgement,
+  raisedAt: Date,
+) {
+  const byKey = new Map(allChecks(sheet).map((check) => [check.key, check]));
+  const hung = tagRows(body, judged, byKey);
+  if (hung.length === 0) return hung;
+  await change.tx.insert(tags).values(
+    hung.map((tag) => ({
+      carrierId: actor.carrierId,
+      truckId: body.truckId,
+      id: tag.id,
+      walkId: body.id,
+      checkKey: tag.checkKey,
+      problemKey: tag.problemKey,
+      fittingId: tag.fittingId,
+      part: tag.part,
+      colour: tag.colour,
+      limit: tag.limit,
+      title: tag.title.slice(0, 160),
+      note: tag.note,
+      roadSafety: tag.roadSafety,
+      driverFix: tag.driverFix,
+      remote: tag.remote,
+      raisedBy: actor.personId,
+      raisedAt,
+      receivedAt: change.now,
+    })),
+  );
+  change.moveTags();
+  for (const tag of hung) change.note("tag", tag.id, { colour: tag.colour });
+  return hung;
+}
+
+/** What the walk says of tags that hung before it: `worse` may raise a colour, nothing lowers one. */
+export async function writeSeenTags(
+  change: GateChange,
+  actor: Actor,
+  body: WalkBody,
+): Promise<void> {
+  if (body.seenTags.length === 0) return;
+  const key = { carrierId: actor.carrierId, truckId: body.truckId };
+  const open = await readOpenTags(change.tx, key, { zone: "UTC", shopOpensMinute: 0 });
+  const rows = body.seenTags.flatMap((seen) => {
+    const tag = open.find((known) => known.id === seen.tagId);
+    if (!tag) return [];
+    const asked = seen.seen === "worse" ? (seen.colour ?? tag.colour) : tag.colour;
+    const colour = colourRank(asked) > colourRank(tag.colour) ? asked : tag.colour;
+    const limit = colour === "yellow" ? tag.limit : null;
+    const { id, tagId, seen: word, note } = seen;
+    return [{ ...key, id, tagId, walkId: body.id, seen: word, colour, limit, note }];
+  });
+  if (rows.length === 0) return;
+  await change.tx
+    .insert(tagChanges)
+    .values(rows.map((row) => ({ ...row, changedBy: actor.personId, changedAt: change.now })));
+  if (rows.some((row) => row.seen === "worse")) change.moveTags();
+}

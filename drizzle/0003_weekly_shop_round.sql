@@ -1,0 +1,1 @@
+ALTER TABLE `rounds` MODIFY COLUMN `kind` enum('weekly','weekly-shop','monthly') NOT NULL;
