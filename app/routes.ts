@@ -11,6 +11,8 @@ export default [
   route("walk", "routes/walk/trucks.tsx"),
   route("walk/:unit", "routes/walk/walk.tsx"),
   route("bench", "routes/bench/bench.tsx"),
+  route("bench/rounds", "routes/bench/rounds.tsx"),
+  route("bench/rounds/:unit/:round", "routes/bench/round.tsx"),
   route("board", "routes/board/board.tsx"),
   route("board/:unit", "routes/board/truck.tsx"),
   route("api/v1/walks", "routes/api/walks.ts"),

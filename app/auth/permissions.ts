@@ -11,6 +11,8 @@ const PERMISSIONS = {
   "truck.manage": ["manager"],
   "bench.read": ["mechanic", "manager"],
   "tag.sign-off": ["mechanic", "manager", "driver"],
+  "run-limit.sign": ["mechanic", "manager"],
+  "round.record": ["mechanic"],
   "board.read": ["dispatcher", "mechanic", "manager"],
   "handover.make": ["dispatcher"],
   "people.manage": ["manager"],

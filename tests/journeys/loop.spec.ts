@@ -30,13 +30,24 @@ async function expectAccessible(page: Page) {
   await page.emulateMedia({ colorScheme: null });
 }
 
+/** Answers every check of the sheet as a driver would who finds nothing wrong. */
 async function fillWalk(page: Page, name: string) {
   for (const station of await page.getByRole("group").all()) {
     const good = station.getByRole("button", { name: "Seen, all good" });
     if ((await good.count()) > 0) await good.click();
   }
+  for (const drain of await page.locator("select[data-alone]").all()) {
+    await drain.selectOption({ label: "Cracked it: dry" });
+  }
+  for (const shut of await page.getByRole("checkbox", { name: /: shut again$/ }).all()) {
+    await shut.check();
+  }
   const numbers: [RegExp, string][] = [
-    [/^air lost.*psi/i, "2"],
+    [/^air lost.*psi/i, "1"],
+    [/^tread/i, "9"],
+    [/^low-air warning/i, "65"],
+    [/^spring brake/i, "30"],
+    [/^pressure relief.*psi/i, "12"],
     [/^load aboard/i, "0"],
     [/hours.*, h$/i, "1300"],
     [/odometer.*, mi$/i, "120500"],
@@ -48,17 +59,13 @@ async function fillWalk(page: Page, name: string) {
   }
   for (const box of await page.getByRole("textbox", { name: /^(caps|sight)/i }).all()) {
     const hint = (await box.getAttribute("aria-describedby")) ?? "";
-    const words =
-      (await page.locator(`#${CSS_escape(hint.split(" ").at(-1) ?? "")}`).textContent()) ?? "";
+    const words = (await page.locator(`[id="${hint.split(" ").at(-1)}"]`).textContent()) ?? "";
     await box.fill(words.match(/\d+/)?.[0] ?? "0");
   }
-  for (const box of await page.getByRole("checkbox", { name: "Heard it open" }).all())
-    await box.check();
+  for (const heard of await page.getByRole("group", { name: /heard it open/ }).all()) {
+    await heard.getByRole("radio", { name: "Yes" }).check();
+  }
   await page.getByLabel(/name/i).last().fill(name);
-}
-
-function CSS_escape(id: string): string {
-  return id.replace(/([^a-zA-Z0-9_-])/g, "\\$1");
 }
 
 async function handOver(page: Page, driver: string) {

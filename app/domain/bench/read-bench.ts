@@ -1,12 +1,13 @@
-import { and, eq, inArray, isNull, sql } from "drizzle-orm";
+import { and, eq, inArray, isNull } from "drizzle-orm";
 import type { Db } from "../../db/client";
 import { yards } from "../../db/schema/carriers";
 import { people } from "../../db/schema/people";
-import { photos, tags } from "../../db/schema/tags";
+import { photos, runLimits, tagChanges, tags } from "../../db/schema/tags";
 import { trucks } from "../../db/schema/trucks";
+import { colourRank } from "../../trade/limits";
 import type { Actor } from "../actor";
 
-/** Open tags, worst and oldest first, with the photos promised and stored for each. */
+/** Open tags as they hang now, worst and oldest first, with their photos and any leave to run. */
 export async function readBench(db: Db, actor: Actor) {
   const { carrierId } = actor;
   const open = await db
@@ -17,13 +18,10 @@ export async function readBench(db: Db, actor: Actor) {
       colour: tags.colour,
       limit: tags.limit,
       note: tags.note,
-      checkKey: tags.checkKey,
-      roadSafety: tags.roadSafety,
+      remote: tags.remote,
       raisedAt: tags.raisedAt,
       raisedBy: people.name,
-      truckId: trucks.id,
       unitNumber: trucks.unitNumber,
-      standing: trucks.standing,
       yardName: yards.name,
       zone: yards.zone,
     })
@@ -31,25 +29,46 @@ export async function readBench(db: Db, actor: Actor) {
     .innerJoin(trucks, and(eq(trucks.carrierId, tags.carrierId), eq(trucks.id, tags.truckId)))
     .innerJoin(yards, and(eq(yards.carrierId, trucks.carrierId), eq(yards.id, trucks.yardId)))
     .innerJoin(people, eq(people.id, tags.raisedBy))
-    .where(and(eq(tags.carrierId, carrierId), isNull(tags.signedOffAt)))
-    .orderBy(sql`field(${tags.colour}, 'red', 'yellow', 'white')`, tags.raisedAt);
+    .where(and(eq(tags.carrierId, carrierId), isNull(tags.signedOffAt)));
   if (open.length === 0) return [];
+  const ids = open.map((tag) => tag.id);
   const promised = await db
     .select({ id: photos.id, tagId: photos.tagId, storedAt: photos.storedAt })
     .from(photos)
+    .where(and(eq(photos.carrierId, carrierId), inArray(photos.tagId, ids)));
+  const worse = await db
+    .select()
+    .from(tagChanges)
     .where(
       and(
-        eq(photos.carrierId, carrierId),
-        inArray(
-          photos.tagId,
-          open.map((tag) => tag.id),
-        ),
+        eq(tagChanges.carrierId, carrierId),
+        inArray(tagChanges.tagId, ids),
+        eq(tagChanges.seen, "worse"),
       ),
+    )
+    .orderBy(tagChanges.changedAt, tagChanges.id);
+  const leaves = await db
+    .select()
+    .from(runLimits)
+    .where(and(eq(runLimits.carrierId, carrierId), inArray(runLimits.tagId, ids)))
+    .orderBy(runLimits.signedAt, runLimits.id);
+  return open
+    .map((tag) => {
+      const change = worse.filter((one) => one.tagId === tag.id).at(-1);
+      const newest = leaves.filter((one) => one.tagId === tag.id).at(-1);
+      const leave = newest && (!change || newest.signedAt > change.changedAt) ? newest : null;
+      return {
+        ...tag,
+        colour: change?.colour ?? tag.colour,
+        limit: change ? change.limit : tag.limit,
+        leave: leave && { untilDay: leave.untilDay, limit: leave.limit },
+        photos: promised.filter((photo) => photo.tagId === tag.id),
+      };
+    })
+    .sort(
+      (a, b) =>
+        colourRank(b.colour) - colourRank(a.colour) || a.raisedAt.getTime() - b.raisedAt.getTime(),
     );
-  return open.map((tag) => ({
-    ...tag,
-    photos: promised.filter((photo) => photo.tagId === tag.id),
-  }));
 }
 
 export type BenchTag = Awaited<ReturnType<typeof readBench>>[number];

@@ -1,5 +1,6 @@
 import { and, desc, eq, inArray } from "drizzle-orm";
 import type { Db } from "../../db/client";
+import { returns } from "../../db/schema/handovers";
 import { people } from "../../db/schema/people";
 import { signOffs, tags } from "../../db/schema/tags";
 import { trucks } from "../../db/schema/trucks";
@@ -11,6 +12,7 @@ import type { Actor } from "../actor";
 import { readFacts } from "../gate/read-facts";
 import { readPolicy } from "../policy/read-policy";
 import { yardOfTruck } from "../tags/yard-of-truck";
+import { yardDay } from "../yard-day";
 
 /** The truck a unit number names, scoped to the carrier. */
 export async function truckByUnit(db: Db, carrierId: string, unitNumber: string) {
@@ -32,7 +34,10 @@ export async function readBrief(db: Db, actor: Actor, truckId: string, clock: Cl
   const key = { carrierId, truckId };
   const { facts } = await db.transaction((tx) => readFacts(tx, key, policy.settings, now));
   const state = standing(facts, policy.settings, now.getTime());
-  const own = clearances(facts, policy.settings).find((c) => c.driverId === personId);
+  const valid = clearances(facts, policy.settings).filter((c) => c.validUntil > now.getTime());
+  const own = valid.find((c) => c.driverId === personId);
+  const yard = await yardOfTruck(db, carrierId, truckId);
+  const today = yardDay(now, yard.zone).day;
   const seen = new Set(
     facts.acknowledgements.filter((a) => a.driverId === personId).flatMap((a) => a.items),
   );
@@ -67,19 +72,9 @@ export async function readBrief(db: Db, actor: Actor, truckId: string, clock: Cl
             ),
           )
           .orderBy(desc(signOffs.signedAt));
-  const [lastWalk] = await db
-    .select({
-      id: walks.id,
-      kind: walks.kind,
-      driver: people.name,
-      countsFrom: walks.countsFrom,
-      complete: walks.complete,
-    })
-    .from(walks)
-    .innerJoin(people, eq(people.id, walks.driverId))
-    .where(and(eq(walks.carrierId, carrierId), eq(walks.truckId, truckId)))
-    .orderBy(desc(walks.countsFrom))
-    .limit(1);
+  const bases = facts.walks.filter(
+    (walk) => walk.kind === "before" && valid.some((c) => c.walkId === walk.id && c !== own),
+  );
   return {
     standing: state,
     openTags: facts.openTags.map((tag) => ({
@@ -94,10 +89,33 @@ export async function readBrief(db: Db, actor: Actor, truckId: string, clock: Cl
         .map((t) => t.eventId),
       ...recent.map((s) => s.id),
     ],
-    ownWalk: own && own.validUntil > now.getTime() ? own : null,
-    lastWalk: lastWalk ?? null,
-    rounds: facts.rounds,
-    tests: facts.tests,
-    yard: await yardOfTruck(db, carrierId, truckId),
+    ownWalk: own ?? null,
+    /** The newest walk of another driver that this one may take over. */
+    base: await walkerOf(db, carrierId, bases.at(-1)?.id ?? null),
+    aboard: await lastAboard(db, key),
+    weeklyDue: facts.rounds.some((one) => one.kind === "weekly" && (one.dueOn ?? today) <= today),
+    bothHalves: policy.settings.bothHalvesDaily,
+    yard,
   };
+}
+
+async function walkerOf(db: Db, carrierId: string, walkId: string | null) {
+  if (walkId === null) return null;
+  const [row] = await db
+    .select({ id: walks.id, driver: people.name, countsFrom: walks.countsFrom })
+    .from(walks)
+    .innerJoin(people, eq(people.id, walks.driverId))
+    .where(and(eq(walks.carrierId, carrierId), eq(walks.id, walkId)));
+  return row ?? null;
+}
+
+/** What the newest return said is in the tank. */
+async function lastAboard(db: Db, { carrierId, truckId }: { carrierId: string; truckId: string }) {
+  const [row] = await db
+    .select({ aboard: returns.aboard, at: returns.returnedAt })
+    .from(returns)
+    .where(and(eq(returns.carrierId, carrierId), eq(returns.truckId, truckId)))
+    .orderBy(desc(returns.returnedAt))
+    .limit(1);
+  return row ?? null;
 }

@@ -5,7 +5,7 @@ import { handovers, returns } from "../../db/schema/handovers";
 import { acknowledgements, runLimits, signOffs, tagChanges, tags } from "../../db/schema/tags";
 import { datedTests, rounds, trucks } from "../../db/schema/trucks";
 import { readings, walks } from "../../db/schema/walks";
-import type { FittingKind } from "../../trade/fittings";
+import type { Fitting, FittingKind } from "../../trade/fittings";
 import { cannotDo } from "../../trade/sheet/cannot-do";
 import type { StandingFacts, TagFact } from "../../trade/standing/facts";
 import { hours } from "../durations";
@@ -51,8 +51,11 @@ async function readTruck(db: Db, key: TruckKey) {
   return row;
 }
 
+/** An open tag, and the answer it came from; null for one hung beside the sheet. */
+export type OpenTagFact = TagFact & { checkKey: string | null; problemKey: string | null };
+
 /** Open tags with the newest change and the newest run-with-limit of each. */
-export async function readOpenTags(db: Db, key: TruckKey, yard: YardClock): Promise<TagFact[]> {
+export async function readOpenTags(db: Db, key: TruckKey, yard: YardClock): Promise<OpenTagFact[]> {
   const open = await db
     .select()
     .from(tags)
@@ -89,6 +92,8 @@ export async function readOpenTags(db: Db, key: TruckKey, yard: YardClock): Prom
         : { id: tag.id, by: tag.raisedBy };
     return {
       id: tag.id,
+      checkKey: tag.checkKey,
+      problemKey: tag.problemKey,
       title: tag.title,
       colour: worse?.colour ?? tag.colour,
       limit: worse ? worse.limit : tag.limit,
@@ -219,8 +224,15 @@ async function readPumpHours(db: Db, key: TruckKey) {
   return hoursRow?.si ?? 0;
 }
 
+/** The coupling is looked at with its guard off: shop work, on every drive that has one. */
+export function needsShopWeekly(fitted: readonly Fitting[]): boolean {
+  const drive = fitted.find((fitting) => fitting.kind === "drive")?.attributes.type;
+  const coupled = fitted.some(({ kind }) => kind === "drive" || kind === "gearbox");
+  return coupled && drive !== "direct";
+}
+
 export interface FactsRead {
-  facts: StandingFacts;
+  facts: Omit<StandingFacts, "openTags"> & { openTags: readonly OpenTagFact[] };
   tagsSeq: number;
   gateSeq: number;
 }
@@ -243,8 +255,6 @@ export async function readFacts(
   const pumpHours = await readPumpHours(db, key);
   const fitted = await readFittings(db, key);
   const has = (kind: FittingKind) => fitted.some((fitting) => fitting.kind === kind);
-  const drive = fitted.find((fitting) => fitting.kind === "drive")?.attributes.type;
-  const weeklyShop = (has("drive") || has("gearbox")) && drive !== "direct";
   const byLaw = testsFor(truck.kind, fitted).filter((required) => required.byLaw);
   const entered = yardDay(truck.createdAt, truck.zone).day;
   return {
@@ -268,7 +278,7 @@ export async function readFacts(
       ...seen,
       walks: walkFacts,
       dayEnds,
-      rounds: roundFacts(dues.done, entered, yard, policy, weeklyShop),
+      rounds: roundFacts(dues.done, entered, yard, policy, needsShopWeekly(fitted)),
       tests: testFacts(
         dues.newest,
         byLaw.map((required) => required.test),

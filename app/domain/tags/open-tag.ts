@@ -1,6 +1,8 @@
 import { and, eq } from "drizzle-orm";
+import { validate as isUuid } from "uuid";
 import type { Db } from "../../db/client";
 import { signOffs, tags } from "../../db/schema/tags";
+import type { Limit } from "../../trade/limits";
 import { readOpenTags } from "../gate/read-facts";
 import type { SignableTag } from "./who-signs";
 
@@ -11,6 +13,15 @@ export async function truckOfTag(db: Db, carrierId: string, tagId: string): Prom
     .from(tags)
     .where(and(eq(tags.carrierId, carrierId), eq(tags.id, tagId)));
   return row?.truckId ?? null;
+}
+
+/** What a tag forbids as it hangs now; null when it forbids nothing or is no open tag here. */
+export async function limitOfTag(db: Db, carrierId: string, tagId: string): Promise<Limit | null> {
+  if (!isUuid(tagId)) return null;
+  const truckId = await truckOfTag(db, carrierId, tagId);
+  if (!truckId) return null;
+  const open = await readOpenTags(db, { carrierId, truckId }, { zone: "UTC", shopOpensMinute: 0 });
+  return open.find((fact) => fact.id === tagId)?.limit ?? null;
 }
 
 export interface OpenTag extends SignableTag {

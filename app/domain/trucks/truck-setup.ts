@@ -41,6 +41,7 @@ async function readUnit(db: Db, carrierId: string, unitNumber: string) {
         inService: trucks.inService,
         standing: trucks.standing,
         standingUntil: trucks.standingUntil,
+        detail: trucks.standingDetail,
         gateFault: trucks.gateFault,
       },
       yard: {

@@ -1,4 +1,3 @@
-import { and, eq, inArray } from "drizzle-orm";
 import { v7 as uuidv7 } from "uuid";
 import type { Db } from "../../db/client";
 import { tagChanges, tags } from "../../db/schema/tags";
@@ -50,25 +49,10 @@ function tagRows(body: WalkBody, judged: Judgement, byKey: Map<string, Check>) {
 
 /** Open tags as a new finding is compared with them. */
 export async function comparableTags(tx: Db, key: TruckKey): Promise<OpenTag[]> {
-  const facts = await readOpenTags(tx, key, { zone: "UTC", shopOpensMinute: 0 });
-  if (facts.length === 0) return [];
-  const rows = await tx
-    .select({ id: tags.id, checkKey: tags.checkKey, problemKey: tags.problemKey })
-    .from(tags)
-    .where(
-      and(
-        eq(tags.carrierId, key.carrierId),
-        inArray(
-          tags.id,
-          facts.map((fact) => fact.id),
-        ),
-      ),
-    );
-  return facts.flatMap(({ id, colour, limit }) => {
-    const row = rows.find((known) => known.id === id);
-    if (!row?.checkKey || !row.problemKey) return [];
-    return [{ checkKey: row.checkKey, problemKey: row.problemKey, colour, limit }];
-  });
+  const open = await readOpenTags(tx, key, { zone: "UTC", shopOpensMinute: 0 });
+  return open.flatMap(({ checkKey, problemKey, colour, limit }) =>
+    checkKey && problemKey ? [{ checkKey, problemKey, colour, limit }] : [],
+  );
 }
 
 /** Writes the tags of a walk as one statement; answers with what was hung. */

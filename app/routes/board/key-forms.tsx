@@ -1,4 +1,5 @@
 import { Form } from "react-router";
+import type { FormFaults } from "~/http/field-faults";
 import { loop } from "~/text/en/loop";
 import { Button } from "~/ui/button";
 import { CheckField } from "~/ui/fields/check-field";
@@ -18,13 +19,16 @@ export function HandOverForm({
   truckId,
   drivers,
   typed,
+  faults,
 }: {
   id: string;
   truckId: string;
   drivers: { id: string; name: string }[];
   typed: Record<string, string>;
+  faults: FormFaults;
 }) {
-  const field = (name: string) => plainField(name, { value: typed[name] ?? "" });
+  const field = (name: string) =>
+    plainField(name, { value: typed[name] ?? "", errors: faults[name] });
   const people = drivers.map((driver) => ({ value: driver.id, label: driver.name }));
   return (
     <Form method="post" className="space-y-4" aria-label={loop.board.handOver}>
@@ -57,14 +61,26 @@ export function HandOverForm({
 }
 
 /** The key comes back to its peg. */
-export function TakeBackForm({ id, handoverId }: { id: string; handoverId: string }) {
+export function TakeBackForm({
+  id,
+  handoverId,
+  typed,
+  faults,
+}: {
+  id: string;
+  handoverId: string;
+  typed: Record<string, string>;
+  faults: FormFaults;
+}) {
+  const field = (name: string) =>
+    plainField(name, { value: typed[name] ?? "", errors: faults[name] });
   return (
     <Form method="post" className="space-y-4" aria-label={loop.board.takeBack}>
       <h2 className="text-xl font-bold">{loop.board.takeBack}</h2>
       <input type="hidden" name="id" value={id} />
       <input type="hidden" name="handoverId" value={handoverId} />
       <ChoiceTiles
-        field={plainField("aboard")}
+        field={field("aboard")}
         label={loop.board.aboard}
         choices={[
           { value: "empty", label: loop.board.empty },
@@ -73,13 +89,13 @@ export function TakeBackForm({ id, handoverId }: { id: string; handoverId: strin
         columns={2}
       />
       <TextField
-        field={plainField("pumpHours")}
+        field={field("pumpHours")}
         label={loop.board.pumpHours}
         inputMode="decimal"
         optional
       />
-      <CheckField field={plainField("endsDay")} label={loop.board.endsDay} />
-      <TextAreaField field={plainField("note")} label={loop.board.note} optional />
+      <CheckField field={field("endsDay")} label={loop.board.endsDay} />
+      <TextAreaField field={field("note")} label={loop.board.note} optional />
       <Button type="submit" kind="main" name="intent" value="take-back">
         {loop.board.takeBack}
       </Button>

@@ -2,6 +2,14 @@ import { handOverSchema } from "~/domain/handovers/hand-over";
 import { takeBackSchema } from "~/domain/handovers/take-back";
 import { toSi } from "~/trade/units";
 
+/** The form's names of the needs. */
+export const NEED_NAMES = {
+  pressureOffLoad: "pressure",
+  vacuumPa: "vacuum",
+  fillL: "fill",
+  hoseM: "hose",
+};
+
 /** A number as typed, or null when nothing was; NaN, which no schema takes, when it is no number. */
 function typedNumber(form: FormData, name: string): number | null {
   const text = String(form.get(name) ?? "")

@@ -8,16 +8,18 @@ import { readBoard } from "~/domain/board/read-board";
 import { handOver } from "~/domain/handovers/hand-over";
 import { takeBack } from "~/domain/handovers/take-back";
 import { REFUSAL_STATUS } from "~/domain/refusals";
-import { reasonText } from "~/text/en/gate";
+import { type FormFaults, faultsOfFields, faultsOfIssues } from "~/http/field-faults";
+import { reasonText, warningText } from "~/text/en/gate";
 import { loop } from "~/text/en/loop";
 import { refusalText } from "~/text/en/refusals";
 import type { GateReason } from "~/trade/standing/gate";
 import { KeyTag } from "~/ui/key-tag";
 import { Notice } from "~/ui/notice";
 import { PlaceFrame } from "~/ui/place-frame";
+import { Reasons } from "~/ui/reasons";
 import type { Route } from "./+types/truck";
 import { HandOverForm, TakeBackForm } from "./key-forms";
-import { handOverInput, takeBackInput } from "./read-key-form";
+import { handOverInput, NEED_NAMES, takeBackInput } from "./read-key-form";
 
 export async function loader({ context, params }: Route.LoaderArgs) {
   const actor = requirePermission(context, "board.read");
@@ -41,19 +43,26 @@ export async function action({ context, request }: Route.ActionArgs) {
   const back = form.get("intent") === "take-back";
   const parsed = back ? takeBackInput(form) : handOverInput(form);
   const typed = Object.fromEntries([...form].map(([name, value]) => [name, String(value)]));
-  const empty = { typed, reasons: [] as GateReason[], done: null as "handed" | "back" | null };
+  const empty = { typed, reasons: [] as GateReason[], faults: {}, fault: null };
+  const done = null as "handed" | "back" | null;
   if (!parsed.success) {
-    const faults = parsed.error.issues.map((issue) => refusalText.field(issue.message));
-    return data({ ...empty, faults }, { status: 400 });
+    const faults = faultsOfIssues(parsed.error.issues, NEED_NAMES);
+    return data({ ...empty, done, faults }, { status: 400 });
   }
   const db = dbOf(context);
   const result = parsed.back
     ? await takeBack(db, actor, parsed.data)
     : await handOver(db, actor, parsed.data);
-  if (result.ok) return data({ ...empty, faults: [], done: back ? "back" : "handed" });
-  const { code, reasons = [] } = result.refusal;
+  if (result.ok) return data({ ...empty, done: back ? ("back" as const) : ("handed" as const) });
+  const { code, reasons = [], fields } = result.refusal;
   return data(
-    { ...empty, faults: [refusalText.title(code)], reasons: reasons as GateReason[] },
+    {
+      ...empty,
+      done,
+      faults: fields ? faultsOfFields(fields, NEED_NAMES) : {},
+      fault: fields ? null : refusalText.title(code),
+      reasons: reasons as GateReason[],
+    },
     { status: REFUSAL_STATUS[code] },
   );
 }
@@ -62,6 +71,9 @@ export default function Truck({ loaderData, actionData }: Route.ComponentProps) 
   const { frame, truck, drivers, mayHandOver, formId } = loaderData;
   const reasons = truck.detail.reasons.map(reasonText);
   const [first] = reasons;
+  const typed: Record<string, string> = actionData?.done ? {} : (actionData?.typed ?? {});
+  const faults: FormFaults = actionData?.faults ?? {};
+  const back = typed.intent === "take-back";
   return (
     <PlaceFrame frame={frame}>
       <p className="mb-4">
@@ -79,6 +91,16 @@ export default function Truck({ loaderData, actionData }: Route.ComponentProps) 
             heading="h1"
           />
           <Reasons title={loop.board.standing} told={reasons} />
+          {truck.detail.warnings.length > 0 && (
+            <section>
+              <h2 className="mb-2 text-xl font-bold">{loop.board.due}</h2>
+              <ul className="list-disc pl-5">
+                {truck.detail.warnings.map((kind) => (
+                  <li key={kind}>{warningText(kind)}</li>
+                ))}
+              </ul>
+            </section>
+          )}
         </div>
         <div className="space-y-6">
           {actionData?.done && (
@@ -86,16 +108,25 @@ export default function Truck({ loaderData, actionData }: Route.ComponentProps) 
               <p>{actionData.done === "handed" ? loop.board.handed : loop.board.back}</p>
             </Notice>
           )}
-          {actionData && actionData.faults.length > 0 && (
-            <Notice tone="stop" title={loop.board.refusedTitle} announce="now">
-              {actionData.faults.map((fault) => (
-                <p key={fault}>{fault}</p>
-              ))}
+          {actionData?.fault && (
+            <Notice tone="stop" title={back ? undefined : loop.board.refusedTitle} announce="now">
+              <p>{actionData.fault}</p>
               <Reasons told={actionData.reasons.map(reasonText)} />
             </Notice>
           )}
+          {Object.keys(faults).length > 0 && (
+            <Notice tone="stop" announce="now">
+              <p>{loop.board.typedKept}</p>
+            </Notice>
+          )}
           {mayHandOver && truck.out && (
-            <TakeBackForm key={formId} id={formId} handoverId={truck.out.handoverId} />
+            <TakeBackForm
+              key={formId}
+              id={formId}
+              handoverId={truck.out.handoverId}
+              typed={back ? typed : {}}
+              faults={back ? faults : {}}
+            />
           )}
           {mayHandOver && !truck.out && (
             <HandOverForm
@@ -103,29 +134,13 @@ export default function Truck({ loaderData, actionData }: Route.ComponentProps) 
               id={formId}
               truckId={truck.id}
               drivers={drivers}
-              typed={actionData?.done ? {} : (actionData?.typed ?? {})}
+              typed={back ? {} : typed}
+              faults={back ? {} : faults}
             />
           )}
         </div>
       </div>
     </PlaceFrame>
-  );
-}
-
-function Reasons({ title, told }: { title?: string; told: ReturnType<typeof reasonText>[] }) {
-  if (told.length === 0) return null;
-  return (
-    <section>
-      {title && <h2 className="mb-2 text-xl font-bold">{title}</h2>}
-      <ul className="space-y-3">
-        {told.map(({ why, clears }) => (
-          <li key={why} className="border-l-4 border-brass pl-3">
-            <p className="font-bold">{why}</p>
-            <p>{clears}</p>
-          </li>
-        ))}
-      </ul>
-    </section>
   );
 }
 

@@ -1,8 +1,15 @@
+import type { ClearsNot } from "~/domain/walks/counts-from";
 import type { StandingWord } from "~/trade/standing/standing";
 import type { WalkToSend } from "./read-walk";
 
 export type SentWalk =
-  | { state: "sent"; standing: StandingWord; missing: string[]; photosLost: number }
+  | {
+      state: "sent";
+      standing: StandingWord;
+      missing: string[];
+      clearsNot: ClearsNot | null;
+      photosLost: number;
+    }
   | { state: "refused"; faults: string[] }
   | { state: "no-signal" };
 
@@ -42,5 +49,6 @@ export async function sendWalk(walk: WalkToSend, signedAt: number): Promise<Sent
     const stored = await send(`/api/v1/photos/${id}`, id, { method: "PUT", body: file });
     if (!stored?.ok) photosLost += 1;
   }
-  return { state: "sent", standing: said.standing, missing: said.missing, photosLost };
+  const { standing, missing, clearsNot } = said;
+  return { state: "sent", standing, missing, clearsNot, photosLost };
 }

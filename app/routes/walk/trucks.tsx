@@ -5,6 +5,7 @@ import { dbOf } from "~/context";
 import { readBoard } from "~/domain/board/read-board";
 import { reasonText } from "~/text/en/gate";
 import { loop } from "~/text/en/loop";
+import { walkText } from "~/text/en/walk";
 import { EmptyState } from "~/ui/empty-state";
 import { KeyTag } from "~/ui/key-tag";
 import { PageTitle } from "~/ui/page-frame";
@@ -34,8 +35,8 @@ export default function Trucks({ loaderData }: Route.ComponentProps) {
   const { frame, yards } = loaderData;
   return (
     <PlaceFrame frame={frame}>
-      <PageTitle title={loop.walk.title} lead={loop.walk.which} />
-      {yards.length === 0 && <EmptyState title={loop.walk.none} />}
+      <PageTitle title={walkText.title} lead={walkText.which} />
+      {yards.length === 0 && <EmptyState title={walkText.none}>{walkText.noneHow}</EmptyState>}
       {yards.map((yard) => (
         <PegRow key={yard.id} yard={yard.name} note={loop.board.trucks(yard.trucks.length)}>
           {yard.trucks.map((truck) => (
@@ -60,4 +61,4 @@ export default function Trucks({ loaderData }: Route.ComponentProps) {
   );
 }
 
-export const meta: Route.MetaFunction = () => [{ title: `${loop.walk.title} · ${loop.product}` }];
+export const meta: Route.MetaFunction = () => [{ title: `${walkText.title} · ${loop.product}` }];

@@ -29,6 +29,13 @@ export function limitText(limit: Limit): string {
 
 const DATED = (id: string) => id.replaceAll("-", " ");
 
+/** What is due soon or overdue, and does not hold the key yet. */
+export function warningText(kind: string): string {
+  if (kind === "weekly" || kind === "monthly") return `The ${kind} round is overdue.`;
+  if (kind === "weekly-shop") return "The shop's part of the weekly round is overdue.";
+  return `Its date comes up soon: ${DATED(kind)}.`;
+}
+
 /** Why, and what would clear it. */
 export interface Told {
   why: string;

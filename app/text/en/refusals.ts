@@ -26,6 +26,12 @@ type Words = string | ((values: FaultValues) => string);
 const FIELDS: Record<string, Words> = {
   ...SETUP_FAULTS,
   ...PEOPLE_FAULTS,
+  "choose-one": "Choose one.",
+  "fill-in": "Fill this in.",
+  "too-long": "That is too long. Shorten it.",
+  "too-large": "That is more than can be. Type a smaller number.",
+  "zero-or-more": "Type 0 or a larger number.",
+  "above-zero": "Type a number above 0.",
   "signature-empty": "Type your name to sign.",
   "reason-empty": "Say why no repair is needed.",
   "run-name-empty": "Name the run.",

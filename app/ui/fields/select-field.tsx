@@ -17,13 +17,19 @@ export function SelectField({
   hint,
   optional,
   options,
-}: FieldProps & { options: readonly (Option | OptionGroup)[] }) {
+  alone,
+}: FieldProps & {
+  options: readonly (Option | OptionGroup)[];
+  /** Always answered by itself: a press that answers several leaves it out. */
+  alone?: boolean;
+}) {
   return (
     <Field field={field} label={label} hint={hint} optional={optional}>
       <select
         key={field.key}
         defaultValue={startOf(field)}
         {...controlProps(field, hint)}
+        data-alone={alone || undefined}
         className={`${CONTROL} w-full`}
       >
         {options.map((option) =>

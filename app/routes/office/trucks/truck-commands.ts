@@ -1,6 +1,7 @@
 import { z } from "zod";
 import type { Db } from "~/db/client";
 import type { Actor } from "~/domain/actor";
+import { clearGateFault } from "~/domain/gate/clear-fault";
 import type { Result } from "~/domain/refusals";
 import { endDatedTest } from "~/domain/trucks/record-dated-test";
 import { removeFitting, restoreFitting } from "~/domain/trucks/remove-fitting";
@@ -14,6 +15,7 @@ export const truckCommandSchema = z.discriminatedUnion("intent", [
   z.object({ intent: z.literal("restore-fitting"), fittingId: z.uuid() }),
   z.object({ intent: z.literal("remove-set-point"), reading: z.string().max(40) }),
   z.object({ intent: z.literal("end-test"), kind: z.string().max(40) }),
+  z.object({ intent: z.literal("clear-fault") }),
   z.object({ intent: z.literal("out-of-service") }),
   z.object({ intent: z.literal("in-service") }),
 ]);
@@ -24,6 +26,7 @@ const DONE: Record<TruckCommand["intent"], SavedNote> = {
   "restore-fitting": "restored",
   "remove-set-point": "set-point",
   "end-test": "test",
+  "clear-fault": "worked-out",
   "out-of-service": "service",
   "in-service": "service",
 };
@@ -47,6 +50,8 @@ export function runTruckCommand(
       return removeSetPoint(db, actor, { truckId, reading: command.reading });
     case "end-test":
       return endDatedTest(db, actor, { truckId, kind: command.kind });
+    case "clear-fault":
+      return clearGateFault(db, actor, { truckId });
     case "out-of-service":
       return setInService(db, actor, { truckId, inService: false });
     case "in-service":

@@ -3,12 +3,14 @@ import { data, redirect } from "react-router";
 import { requirePermission } from "~/auth/require-permission";
 import { dbOf } from "~/context";
 import { type FieldFault, REFUSAL_STATUS } from "~/domain/refusals";
+import { reasonText } from "~/text/en/gate";
 import { fittingKinds, office, unitKinds, vinWarnings } from "~/text/en/office";
 import { refusalText } from "~/text/en/refusals";
 import { ButtonLink } from "~/ui/button";
 import { EmptyState } from "~/ui/empty-state";
 import { Notice } from "~/ui/notice";
 import { PageTitle } from "~/ui/page-frame";
+import { Reasons } from "~/ui/reasons";
 import { ActionButton, ConfirmedButton } from "../office-form";
 import { notFound } from "../office-reply";
 import { SavedNote } from "../page-parts";
@@ -70,9 +72,17 @@ export default function Truck({ loaderData, actionData }: Route.ComponentProps) 
       ))}
       {truck.gateFault && (
         <div className="mb-6">
-          <Notice tone="stop">{words.gateFault}</Notice>
+          <Notice
+            tone="stop"
+            action={<ActionButton name="clear-fault">{words.workOut}</ActionButton>}
+          >
+            {words.gateFault}
+          </Notice>
         </div>
       )}
+      <div className="mb-8 max-w-prose">
+        <Reasons told={(truck.detail?.reasons ?? []).map(reasonText)} />
+      </div>
       <dl className="mb-4 grid grid-cols-[4rem_1fr] gap-y-2 sm:grid-cols-[8rem_1fr]">
         <dt className="text-mute">{office.trucks.kind}</dt>
         <dd>{unitKinds[truck.kind]}</dd>
