@@ -15,6 +15,8 @@ import { benchText } from "~/text/en/bench";
 import { loop } from "~/text/en/loop";
 import { refusalText } from "~/text/en/refusals";
 import { ROUND_KINDS } from "~/trade/rounds";
+import { cautionBefore } from "~/trade/sheet/caution-before";
+import type { CautionKey } from "~/trade/sheet/cautions";
 import type { Check } from "~/trade/sheet/check";
 import { roundChecks } from "~/trade/sheet/due-checks";
 import { Button } from "~/ui/button";
@@ -111,9 +113,9 @@ export default function Round({ loaderData, actionData }: Route.ComponentProps) 
           </h2>
           {station.caution && <CautionOf name={station.caution} />}
           <ul className="mt-3 divide-y divide-line border-y border-line">
-            {station.checks.map((check) => (
+            {station.checks.map((check, index) => (
               <li key={check.key} className="space-y-2 py-4">
-                <RoundCheck check={check} />
+                <RoundCheck check={check} caution={cautionBefore(station, index)} />
               </li>
             ))}
           </ul>
@@ -143,10 +145,10 @@ export default function Round({ loaderData, actionData }: Route.ComponentProps) 
   );
 }
 
-function RoundCheck({ check }: { check: Check }) {
+function RoundCheck({ check, caution }: { check: Check; caution: CautionKey | null }) {
   return (
     <>
-      {check.caution && <CautionOf name={check.caution} />}
+      {caution && <CautionOf name={caution} />}
       <p className="font-bold">{check.label}</p>
       <p>{check.good}</p>
       {check.steps.length > 0 && (

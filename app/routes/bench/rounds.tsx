@@ -35,7 +35,7 @@ function columns(mayRecord: boolean): Column<RoundLine>[] {
     { key: "last", head: words.last, cell: (line) => line.lastOn ?? words.never },
     {
       key: "state",
-      head: loop.board.standing,
+      head: words.stateHead,
       cell: (line) => (
         <span className={line.state === "ahead" ? "text-mute" : "font-bold"}>
           {words.state[line.state]}
@@ -60,8 +60,20 @@ function columns(mayRecord: boolean): Column<RoundLine>[] {
   return [...every, record];
 }
 
+function Lines(props: { caption: string; lines: RoundLine[]; mayRecord: boolean }) {
+  return (
+    <Table
+      caption={props.caption}
+      columns={columns(props.mayRecord)}
+      rows={props.lines}
+      rowKey={(line) => `${line.truckId} ${line.kind}`}
+    />
+  );
+}
+
 export default function Rounds({ loaderData }: Route.ComponentProps) {
   const { frame, lines, mayRecord, done } = loaderData;
+  const now = lines.filter((line) => line.state !== "ahead");
   return (
     <PlaceFrame frame={frame}>
       <p className="mb-4">
@@ -80,13 +92,23 @@ export default function Rounds({ loaderData }: Route.ComponentProps) {
       {lines.length === 0 ? (
         <EmptyState title={words.none} />
       ) : (
-        <Table
-          caption={words.title}
-          captionHidden
-          columns={columns(mayRecord)}
-          rows={lines}
-          rowKey={(line) => `${line.truckId} ${line.kind}`}
-        />
+        <>
+          {now.length === 0 ? (
+            <EmptyState title={words.nothingDue} />
+          ) : (
+            <Lines caption={words.dueNow(now.length)} lines={now} mayRecord={mayRecord} />
+          )}
+          <details className="mt-8">
+            <summary className="min-h-11 cursor-pointer content-center text-lg font-bold underline">
+              {words.ahead(lines.length - now.length)}
+            </summary>
+            <Lines
+              caption={words.ahead(lines.length - now.length)}
+              lines={lines.filter((line) => line.state === "ahead")}
+              mayRecord={mayRecord}
+            />
+          </details>
+        </>
       )}
     </PlaceFrame>
   );

@@ -45,7 +45,7 @@ export function Tag({
       where={tag.yardName}
       since={
         <>
-          <Time at={tag.raisedAt} zone={tag.zone} /> {benchText.raised(tag.raisedBy)}
+          <Time at={tag.raisedAt} zone={tag.zone} />, {benchText.raised(tag.raisedBy)}
         </>
       }
       limit={tag.limit ? limitText(tag.limit) : undefined}

@@ -9,6 +9,7 @@ import { KeyTag } from "~/ui/key-tag";
 import { PageTitle } from "~/ui/page-frame";
 import { Pegged, PegRow } from "~/ui/pegboard";
 import { PlaceFrame } from "~/ui/place-frame";
+import { Time } from "~/ui/time";
 import type { Route } from "./+types/board";
 
 export async function loader({ context }: Route.LoaderArgs) {
@@ -18,7 +19,11 @@ export async function loader({ context }: Route.LoaderArgs) {
 
 function why(truck: BoardTruck): string | undefined {
   if (truck.out) return loop.board.outWith(truck.out.driver, truck.out.runName);
-  const [first] = truck.detail.reasons;
+  // A red tag hangs on the key and says so itself.
+  const [first] = truck.detail.reasons.filter(
+    (reason) => reason.code !== "red-tag" || !truck.tags.some((tag) => tag.id === reason.id),
+  );
+  if (truck.standing === "held" && truck.detail.reasons[0] !== first) return undefined;
   if (first) return reasonText(first).why;
   const names = truck.walkedBy.map((walker) => walker.name).join(", ");
   return names ? loop.board.walkedBy(names) : undefined;
@@ -26,9 +31,19 @@ function why(truck: BoardTruck): string | undefined {
 
 export default function Board({ loaderData }: Route.ComponentProps) {
   const { frame, board } = loaderData;
+  const zone = board.yards[0]?.zone;
   return (
     <PlaceFrame frame={frame} wide>
-      <PageTitle title={loop.board.title} />
+      <PageTitle
+        title={loop.board.title}
+        lead={
+          zone && (
+            <>
+              {loop.board.asOf} <Time at={board.asOf} zone={zone} />
+            </>
+          )
+        }
+      />
       {board.yards.length === 0 && <EmptyState title={loop.board.none} />}
       {board.yards.map((yard) => (
         <PegRow key={yard.id} yard={yard.name} note={loop.board.trucks(yard.trucks.length)}>

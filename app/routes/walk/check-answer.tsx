@@ -55,11 +55,14 @@ export function CheckAnswer({ check, tagged }: { check: Check; tagged: boolean }
       }}
     >
       {steps.length > 0 && (
-        <ol className="list-decimal space-y-1 pl-6 text-mute">
-          {steps.map((step) => (
-            <li key={step}>{step}</li>
-          ))}
-        </ol>
+        <div className="text-mute">
+          <p>{walkText.steps(label)}</p>
+          <ol className="mt-1 list-decimal space-y-1 pl-6">
+            {steps.map((step) => (
+              <li key={step}>{step}</li>
+            ))}
+          </ol>
+        </div>
       )}
       {numeric && (
         <TextField

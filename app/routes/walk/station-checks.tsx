@@ -1,7 +1,7 @@
 import type { MouseEvent } from "react";
 import type { OpenTagFact } from "~/domain/gate/read-facts";
 import { walkText } from "~/text/en/walk";
-import type { CautionKey } from "~/trade/sheet/cautions";
+import { cautionBefore } from "~/trade/sheet/caution-before";
 import type { Check, Station } from "~/trade/sheet/check";
 import { Button } from "~/ui/button";
 import { CautionOf } from "~/ui/caution-of";
@@ -18,13 +18,6 @@ function fillGood(event: MouseEvent<HTMLButtonElement>) {
     select.value = GOOD;
     select.dispatchEvent(new Event("change", { bubbles: true }));
   }
-}
-
-/** A check's caution stands before it; the same one is not said twice running in a station. */
-function cautionBefore(station: Station, index: number): CautionKey | null {
-  const caution = station.checks[index]?.caution ?? null;
-  const said = station.checks.slice(0, index).map((check) => check.caution);
-  return caution === station.caution || said.includes(caution) ? null : caution;
 }
 
 function startsPressure(checks: readonly Check[], index: number): boolean {

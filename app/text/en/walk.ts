@@ -53,6 +53,7 @@ export const walkText = {
   good: "Seen, all good",
   lookGood: "Good",
   notYet: "Not answered",
+  steps: (label: string) => `${label}, step by step`,
   problem: "Problem",
   hold: (label: string) => `${label}: hold the truck for this`,
   note: (label: string) => `${label}: note`,
