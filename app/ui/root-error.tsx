@@ -9,6 +9,7 @@ export function RootError({ error }: { error: unknown }) {
   const words = status === 403 || status === 404 ? errorText[status] : errorText.other;
   return (
     <PageFrame>
+      <title>{`${words.title} · ${errorText.product}`}</title>
       <ErrorState
         heading="h1"
         title={words.title}

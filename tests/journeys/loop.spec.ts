@@ -1,34 +1,10 @@
-import { readFileSync } from "node:fs";
 import { expect, type Page, test } from "@playwright/test";
 import sharp from "sharp";
+import { expectAccessible } from "./accessible";
 import { signIn } from "./people";
 
 const HOST = "tallowcreek.example";
 const UNIT = "T-104";
-const axe = readFileSync("node_modules/axe-core/axe.min.js", "utf8");
-
-/** Axe finds nothing, by day and by night. */
-async function expectAccessible(page: Page) {
-  for (const colorScheme of ["light", "dark"] as const) {
-    await page.emulateMedia({ colorScheme });
-    const context = page.context();
-    await page.evaluate(axe).catch(async () => {
-      // The page's own policy forbids eval; the script is added from outside it.
-      await context.addInitScript(axe);
-      await page.reload();
-    });
-    const found = await page.evaluate(async () => {
-      const runner = (
-        window as unknown as {
-          axe: { run(): Promise<{ violations: { id: string; nodes: { html: string }[] }[] }> };
-        }
-      ).axe;
-      return (await runner.run()).violations.map(({ id, nodes }) => `${id}: ${nodes[0]?.html}`);
-    });
-    expect(found, `${page.url()} ${colorScheme}`).toEqual([]);
-  }
-  await page.emulateMedia({ colorScheme: null });
-}
 
 /** Answers every check of the sheet as a driver would who finds nothing wrong. */
 async function fillWalk(page: Page, name: string) {
@@ -112,14 +88,14 @@ test("the loop: tagged, refused, signed off, refused, acknowledged, handed over,
     await expect(driverA.getByRole("region", { name: /The walk is in/ })).not.toContainText(
       "clears nothing",
     );
-    await expectAccessible(driverA);
+    await expectAccessible(driverA, "walk-sent");
   });
 
   await test.step("dispatcher B is refused, with reasons", async () => {
     await handOver(dispatcher, "Lena Marsh");
     await expect(dispatcher.getByRole("alert")).toContainText("The key stays on the peg");
     await expect(dispatcher.getByRole("alert")).toContainText("Red tag: Steering parts");
-    await expectAccessible(dispatcher);
+    await expectAccessible(dispatcher, "board-not-clear");
   });
 
   await test.step("A has no bench, and the server refuses A's sign-off", async () => {
@@ -147,7 +123,7 @@ test("the loop: tagged, refused, signed off, refused, acknowledged, handed over,
     const photo = tag.getByRole("img", { name: "Photo 1" });
     await expect(photo).toBeVisible();
     expect(await photo.evaluate((image) => (image as HTMLImageElement).naturalWidth)).toBe(320);
-    await expectAccessible(mechanic);
+    await expectAccessible(mechanic, "bench-photo");
     await tag.getByText("Sign off", { exact: true }).first().click();
     await tag.getByRole("radio", { name: "Repaired" }).check();
     await tag.getByRole("combobox", { name: "What was done" }).selectOption("replaced");

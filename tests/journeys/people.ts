@@ -1,4 +1,5 @@
 import { type Browser, expect, type Page } from "@playwright/test";
+import { openPage } from "./accessible";
 
 const MAIL_PAGE = process.env.KEYPEG_TEST_MAIL_PAGE ?? "";
 
@@ -26,8 +27,7 @@ async function codeFor(email: string, after: Set<string>): Promise<string> {
 
 /** A person in a browser of their own, signed in by the code in their mail. A console error fails the test. */
 export async function signIn(browser: Browser, email: string): Promise<Page> {
-  const context = await browser.newContext({ viewport: { width: 412, height: 915 } });
-  const page = await context.newPage();
+  const page = await openPage(browser);
   page.on("console", (message) => {
     // A refusal is an answer with a 4xx status, which the browser also writes to its console.
     const refused = message.text().startsWith("Failed to load resource");

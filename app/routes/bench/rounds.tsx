@@ -50,7 +50,7 @@ function columns(mayRecord: boolean): Column<RoundLine>[] {
     cell: (line) => (
       <Link
         to={`/bench/rounds/${line.unitNumber}/${line.kind}`}
-        aria-label={words.of(words.kinds[line.kind], line.unitNumber)}
+        aria-label={words.recordOf(words.kinds[line.kind], line.unitNumber)}
         className="inline-flex min-h-11 items-center underline"
       >
         {words.record}

@@ -39,12 +39,16 @@ export function OfficeError() {
       ? notFound.truck
       : notFound.other
     : failed.text;
+  const title = missing ? notFound.title : failed.title;
   return (
-    <ErrorState
-      heading="h1"
-      title={missing ? notFound.title : failed.title}
-      next={next}
-      action={<ButtonLink to="/office">{notFound.back}</ButtonLink>}
-    />
+    <>
+      <title>{`${title} · ${office.product}`}</title>
+      <ErrorState
+        heading="h1"
+        title={title}
+        next={next}
+        action={<ButtonLink to="/office">{notFound.back}</ButtonLink>}
+      />
+    </>
   );
 }

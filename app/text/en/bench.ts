@@ -61,7 +61,7 @@ export const benchText = {
     never: "Not yet",
     state: { due: "Due", warns: "Overdue", holds: "Holds the key", ahead: "Ahead" },
     record: "Do it",
-    of: (round: string, unit: string) => `${round} of ${unit}`,
+    recordOf: (round: string, unit: string) => `Do it: ${round} of ${unit}`,
     checks: (count: number) => (count === 1 ? "1 check" : `${count} checks`),
     nothing: "This truck has no check in this round.",
     finding: "Whatever is wrong goes on a tag in the truck's next walk, before the key leaves.",

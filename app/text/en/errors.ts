@@ -1,5 +1,6 @@
 /** Words when a page cannot be shown: what happened, what to do next. */
 export const errorText = {
+  product: "Keypeg",
   home: "To your start page",
   403: {
     title: "This part is not yours to open",

@@ -235,7 +235,7 @@ function SetPoints({ base, view: { setPoints } }: { base: string; view: TruckVie
             <span className="flex gap-3">
               <ButtonLink
                 to={`${base}/set-points/${line.reading}`}
-                aria-label={words.setOf(line.label)}
+                aria-label={line.set ? words.changeOf(line.label) : words.setOf(line.label)}
               >
                 {line.set ? words.change : words.setIt}
               </ButtonLink>
