@@ -34,22 +34,28 @@ function client(settings: Config["s3"], endpoint: string): S3Client {
 
 const digest = (bytes: Uint8Array) => createHash("sha256").update(bytes).digest("hex");
 
-/** An S3-compatible object store. */
-export function openStorage(settings: Config["s3"]): Storage {
+/** Shorter than a phone waits for a photo: a store that hangs is answered for, not waited out. */
+const DEADLINE_MS = 20_000;
+
+/** An S3-compatible object store. What it has not done within the deadline counts as failed. */
+export function openStorage(settings: Config["s3"], deadlineMs = DEADLINE_MS): Storage {
   const inside = client(settings, settings.endpoint);
   const outside = client(settings, settings.publicEndpoint);
   const Bucket = settings.bucket;
   return {
     async put(Key, bytes, type) {
-      await inside.send(new PutObjectCommand({ Bucket, Key, Body: bytes, ContentType: type }));
-      const back = await inside.send(new GetObjectCommand({ Bucket, Key }));
+      const within = { abortSignal: AbortSignal.timeout(deadlineMs) };
+      const sent = new PutObjectCommand({ Bucket, Key, Body: bytes, ContentType: type });
+      await inside.send(sent, within);
+      const back = await inside.send(new GetObjectCommand({ Bucket, Key }), within);
       const stored = await back.Body?.transformToByteArray();
       if (!stored || digest(stored) !== digest(bytes)) throw new Error("object not stored whole");
     },
     presign: (Key, seconds) =>
       getSignedUrl(outside, new GetObjectCommand({ Bucket, Key }), { expiresIn: seconds }),
     async check() {
-      await inside.send(new HeadBucketCommand({ Bucket }));
+      const within = { abortSignal: AbortSignal.timeout(deadlineMs) };
+      await inside.send(new HeadBucketCommand({ Bucket }), within);
     },
   };
 }

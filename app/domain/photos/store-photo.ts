@@ -15,7 +15,9 @@ export interface PhotoStore {
 
 export type PhotoOutcome =
   | { state: "stored"; id: string }
-  | { state: "not-found" | "not-yours" | "other-picture" | "not-a-picture" };
+  | { state: "not-found" | "not-yours" | "other-picture" | "not-a-picture" }
+  /** The object store did not take it: nothing is marked, and the same bytes may come again. */
+  | { state: "store-away"; cause: unknown };
 
 const LONG_EDGE = 1600;
 const THUMB_EDGE = 320;
@@ -56,6 +58,49 @@ async function reencode(bytes: Uint8Array) {
   });
 }
 
+type Promised = typeof photos.$inferSelect;
+
+/** Stores a picture that is the promised one, and marks it. */
+async function storePicture(
+  db: Db,
+  store: PhotoStore,
+  promised: Promised,
+  bytes: Uint8Array,
+  clock: Clock,
+): Promise<PhotoOutcome> {
+  const { carrierId, id } = promised;
+  const picture = await reencode(bytes);
+  if (!picture) return { state: "not-a-picture" };
+  const objectKey = `${carrierId}/photos/${id}.jpg`;
+  const thumbKey = `${carrierId}/photos/${id}.thumb.jpg`;
+  try {
+    await store.put(objectKey, picture.large.data, "image/jpeg");
+    await store.put(thumbKey, picture.thumb.data, "image/jpeg");
+  } catch (cause) {
+    return { state: "store-away", cause };
+  }
+  await inTransaction(db, async (tx) => {
+    const { width, height } = picture.large.info;
+    const now = clock.now();
+    const [marked] = await tx
+      .update(photos)
+      .set({ storedAt: now, objectKey, thumbKey, width, height })
+      .where(and(thatPhoto(carrierId, id), isNull(photos.storedAt)));
+    if (marked.affectedRows !== 1) return;
+    await writeChanges(tx, carrierId, now, [
+      { kind: "photo", truckId: promised.truckId, subjectId: id },
+    ]);
+  });
+  return { state: "stored", id };
+}
+
+function thatPhoto(carrierId: string, id: string) {
+  return and(eq(photos.carrierId, carrierId), eq(photos.id, id));
+}
+
+/** Pictures being stored: one sent again meanwhile waits for the first, and is not written beside it. */
+const underWay = new Map<string, Promise<PhotoOutcome>>();
+
 /**
  * Takes the bytes of a photo that a record promised: owner, size and SHA-256 are checked
  * against the manifest, the picture is re-encoded, stored, verified and marked. Sent again, it
@@ -69,32 +114,22 @@ export async function storePhoto(
   clock: Clock = systemClock,
 ): Promise<PhotoOutcome> {
   const { carrierId, personId } = actor;
-  const mine = and(eq(photos.carrierId, carrierId), eq(photos.id, input.id));
-  const [promised] = await db.select().from(photos).where(mine);
+  const [promised] = await db.select().from(photos).where(thatPhoto(carrierId, input.id));
   if (!promised) return { state: "not-found" };
   if (promised.ownerId !== personId) return { state: "not-yours" };
   const same = promised.bytes === input.bytes.length && promised.sha256 === sha256Hex(input.bytes);
   if (!same) return { state: "other-picture" };
-  if (promised.storedAt !== null) return { state: "stored", id: input.id };
-  const picture = await reencode(input.bytes);
-  if (!picture) return { state: "not-a-picture" };
-  const objectKey = `${carrierId}/photos/${input.id}.jpg`;
-  const thumbKey = `${carrierId}/photos/${input.id}.thumb.jpg`;
-  await store.put(objectKey, picture.large.data, "image/jpeg");
-  await store.put(thumbKey, picture.thumb.data, "image/jpeg");
-  await inTransaction(db, async (tx) => {
-    const { width, height } = picture.large.info;
-    const now = clock.now();
-    const [marked] = await tx
-      .update(photos)
-      .set({ storedAt: now, objectKey, thumbKey, width, height })
-      .where(and(mine, isNull(photos.storedAt)));
-    if (marked.affectedRows !== 1) return;
-    await writeChanges(tx, carrierId, now, [
-      { kind: "photo", truckId: promised.truckId, subjectId: input.id },
-    ]);
-  });
-  return { state: "stored", id: input.id };
+  if (promised.storedAt !== null) return { state: "stored", id: promised.id };
+  const key = `${carrierId}/${promised.id}`;
+  const running = underWay.get(key);
+  if (running) return running;
+  const storing = storePicture(db, store, promised, input.bytes, clock);
+  underWay.set(key, storing);
+  try {
+    return await storing;
+  } finally {
+    underWay.delete(key);
+  }
 }
 
 /** Where a stored photo lies, scoped to the carrier; null when there is none to show. */
@@ -106,6 +141,6 @@ export async function photoObject(
   const [row] = await db
     .select({ objectKey: photos.objectKey, thumbKey: photos.thumbKey })
     .from(photos)
-    .where(and(eq(photos.carrierId, actor.carrierId), eq(photos.id, input.id)));
+    .where(thatPhoto(actor.carrierId, input.id));
   return (input.size === "large" ? row?.objectKey : row?.thumbKey) ?? null;
 }
