@@ -1,8 +1,12 @@
+import type { z } from "zod";
 import type { FieldFault, Refusal } from "../domain/refusals";
 import { REFUSAL_STATUS } from "../domain/refusals";
 import { refusalText } from "../text/en/refusals";
+import { issueFault } from "./issue-fault";
 
 export interface ProblemError {
+  /** Stable name of the fault. */
+  code: string;
   /** What to do about it. */
   detail: string;
   /** JSON pointer to the field at fault. */
@@ -27,6 +31,7 @@ export function problem(
 function fieldErrors(fields: readonly FieldFault[]): ProblemError[] {
   return fields.map(({ pointer, code, values }) => ({
     pointer: `#${pointer}`,
+    code,
     detail: refusalText.field(code, values),
   }));
 }
@@ -40,15 +45,10 @@ export function refusalProblem(refusal: Refusal): Response {
   });
 }
 
-/** Zod's issues as problem details: one error a field, each with its pointer. */
-export function invalidProblem(
-  issues: readonly { path: readonly PropertyKey[]; message: string }[],
-): Response {
+/** A schema's issues as problem details: one error a field, each with its pointer. */
+export function invalidProblem(issues: readonly z.core.$ZodIssue[]): Response {
   return problem(400, "invalid", {
     title: refusalText.title("invalid"),
-    errors: issues.map((issue) => ({
-      pointer: `#/${issue.path.map(String).join("/")}`,
-      detail: refusalText.field(issue.message),
-    })),
+    errors: fieldErrors(issues.map(issueFault)),
   });
 }

@@ -1,4 +1,5 @@
 import type { FaultValues, RefusalCode } from "../../domain/refusals";
+import { API_FAULTS } from "./api-faults";
 import { PEOPLE_FAULTS } from "./people-faults";
 import { SETUP_FAULTS } from "./setup-faults";
 
@@ -24,6 +25,7 @@ const TITLES: Record<RefusalCode, string> = {
 type Words = string | ((values: FaultValues) => string);
 
 const FIELDS: Record<string, Words> = {
+  ...API_FAULTS,
   ...SETUP_FAULTS,
   ...PEOPLE_FAULTS,
   "choose-one": "Choose one.",
@@ -47,6 +49,8 @@ const FIELDS: Record<string, Words> = {
 /** Words for refusals: one table for commands, one for fields. */
 export const refusalText = {
   title: (code: RefusalCode): string => TITLES[code],
+  /** Is this a field's fault that there are words for? */
+  knows: (code: string): boolean => Object.hasOwn(FIELDS, code),
   field: (code: string, values: FaultValues = {}): string => {
     const words = FIELDS[code] ?? code;
     return typeof words === "function" ? words(values) : words;
