@@ -1,10 +1,15 @@
 import { z } from "zod";
 import { COLOURS } from "../../trade/limits";
-import { answersSchema } from "../../trade/sheet/answers";
+import { answersSchema, checkKeySchema } from "../../trade/sheet/answers";
 import { signatureSchema } from "../signature";
 
 const sha256 = z.string().regex(/^[0-9a-f]{64}$/, "not-a-sha256");
 const note = z.string().trim().max(1000).nullable();
+/** Any time a phone's clock may show, right or wrong, that a DATETIME holds. */
+const phoneTime = z.iso.datetime({ offset: true }).refine((text) => {
+  const year = new Date(text).getUTCFullYear();
+  return year >= 1000 && year <= 9999;
+}, "time-out-of-range");
 
 /** The largest photo a phone may promise, bytes. */
 export const PHOTO_BYTES = 12 * 1024 * 1024;
@@ -12,7 +17,7 @@ export const PHOTOS_PER_TAG = 6;
 
 const tag = z.object({
   id: z.uuid(),
-  checkKey: z.string().min(1).max(80),
+  checkKey: checkKeySchema,
   problemKey: z.string().min(1).max(60),
   colour: z.enum(COLOURS),
   note,
@@ -34,6 +39,14 @@ const photo = z.object({
   bytes: z.number().int().min(1).max(PHOTO_BYTES),
 });
 
+/** A sheet nests nine deep; the database's JSON ends at 32, and a second body is kept as JSON (K4). */
+const SHEET_DEPTH = 20;
+
+function isNestedPast(value: unknown, depth: number): boolean {
+  if (value === null || typeof value !== "object") return false;
+  return depth === 0 || Object.values(value).some((inner) => isNestedPast(inner, depth - 1));
+}
+
 /** The body of POST /api/v1/walks: one signed pass over the sheet, as the phone keeps it. */
 export const walkSchema = z
   .object({
@@ -44,8 +57,11 @@ export const walkSchema = z
     correctsWalkId: z.uuid().nullable().default(null),
     sheetHash: sha256,
     /** Sent along when the phone's sheet may be unknown here. */
-    sheet: z.unknown().optional(),
-    signedAt: z.iso.datetime({ offset: true }),
+    sheet: z
+      .unknown()
+      .transform((sheet) => (isNestedPast(sheet, SHEET_DEPTH) ? undefined : sheet))
+      .optional(),
+    signedAt: phoneTime,
     answers: answersSchema,
     tags: z.array(tag).max(200).default([]),
     seenTags: z.array(seenTag).max(200).default([]),
@@ -65,6 +81,15 @@ export const walkSchema = z
   .superRefine((walk, context) => {
     if ((walk.kind === "takeover") !== (walk.baseWalkId !== null)) {
       context.addIssue({ code: "custom", path: ["baseWalkId"], message: "takeover-needs-base" });
+    }
+    for (const list of ["tags", "seenTags", "photos"] as const) {
+      const ids = new Set<string>();
+      for (const [index, { id }] of walk[list].entries()) {
+        if (ids.has(id.toLowerCase())) {
+          context.addIssue({ code: "custom", path: [list, index, "id"], message: "id-twice" });
+        }
+        ids.add(id.toLowerCase());
+      }
     }
     const perTag = new Map<string | null, number>();
     for (const [index, { tagId }] of walk.photos.entries()) {

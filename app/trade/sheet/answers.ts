@@ -82,8 +82,17 @@ const answerSchema = z.discriminatedUnion("kind", [
 export type Answer = z.infer<typeof answerSchema>;
 export type DrainAnswer = Extract<Answer, { kind: "drain" }>;
 
+/**
+ * The key of a check as sheets write it. No second spelling of one key gets by: the tables
+ * take "cab.horn", "CAB.HORN" and "cab.horn " for the same.
+ */
+export const checkKeySchema = z
+  .string()
+  .max(80)
+  .regex(/^[a-z0-9]+(?:[.-][a-z0-9]+)*$/, "not-a-check-key");
+
 /** Answers by check key. */
 export const answersSchema = z
-  .record(z.string().min(1).max(80), answerSchema)
+  .record(checkKeySchema, answerSchema)
   .refine((answers) => Object.keys(answers).length <= 300, "too-many-answers");
 export type Answers = z.infer<typeof answersSchema>;
