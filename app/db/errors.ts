@@ -18,6 +18,18 @@ function codeOf(error: unknown): string | null {
 }
 
 export const DUPLICATE_KEY = 1062;
+
+/** Was it a record's own id that is taken, not another unique key? Only the text says which. */
+export function isTakenId(error: unknown): boolean {
+  let current: unknown = error;
+  while (current instanceof Error) {
+    if (errnoOf(current) === DUPLICATE_KEY && /for key 'PRIMARY'$/.test(current.message))
+      return true;
+    current = current.cause;
+  }
+  return false;
+}
+
 /** The row referred to is not there. */
 export const FOREIGN_KEY = 1452;
 

@@ -2,7 +2,7 @@ import { createHash } from "node:crypto";
 import { and, eq } from "drizzle-orm";
 import { v7 as uuidv7 } from "uuid";
 import type { Db } from "../../db/client";
-import { DUPLICATE_KEY, errnoOf } from "../../db/errors";
+import { DUPLICATE_KEY, errnoOf, isTakenId } from "../../db/errors";
 import { conflicts, receipts } from "../../db/schema/walks";
 import type { Clock } from "../../services/clock";
 import type { Actor } from "../actor";
@@ -71,6 +71,34 @@ async function stored<R>(
 }
 
 /**
+ * A key was taken while `run` was under way. By the same record: its receipt is the answer. By
+ * another that raced it to something both need: it is there now, so `run` again. By anything
+ * else: the record uses an id that is already another's.
+ */
+async function afterDuplicate<R>(
+  db: Db,
+  actor: Actor,
+  sent: Submission,
+  clock: Clock,
+  run: () => Promise<Result<R>>,
+): Promise<Result<R>> {
+  const first = await stored<R>(db, actor, sent, clock.now());
+  if (first) return first;
+  let taken: unknown;
+  try {
+    return await run();
+  } catch (error) {
+    if (errnoOf(error) !== DUPLICATE_KEY) throw error;
+    taken = error;
+  }
+  const second = await stored<R>(db, actor, sent, clock.now());
+  if (second) return second;
+  if (!isTakenId(taken)) throw taken;
+  await keepConflict(db, actor, sent, clock.now());
+  return refuse("same-id-other-body");
+}
+
+/**
  * K4: the same record, sent any number of times, is stored once and answered with the same
  * receipt. The same id with another body is refused, and the second body kept.
  * `run` must write the receipt in its own transaction.
@@ -91,8 +119,6 @@ export async function once<R>(
     return (await stored<R>(db, actor, sent, clock.now())) ?? result;
   } catch (error) {
     if (errnoOf(error) !== DUPLICATE_KEY) throw error;
-    const after = await stored<R>(db, actor, sent, clock.now());
-    if (after) return after;
-    throw error;
+    return afterDuplicate(db, actor, sent, clock, run);
   }
 }
