@@ -54,7 +54,7 @@ export interface ProblemBody {
   status: number;
   code: string;
   title: string;
-  errors?: { pointer: string; detail: string }[];
+  errors?: { pointer: string; code: string; detail: string }[];
 }
 
 export const problemOf = (answer: Answer) => answer.data as ProblemBody;

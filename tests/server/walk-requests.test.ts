@@ -224,7 +224,7 @@ test("a refused walk is sent again as it is once the cause is gone", async () =>
   const early = await post(bytes);
   expect(early.status).toBe(400);
   expect(problemOf(early).errors).toEqual([
-    { pointer: "#/baseWalkId", detail: "That walk is not on this truck." },
+    { pointer: "#/baseWalkId", code: "unknown-walk", detail: "That walk is not on this truck." },
   ]);
   await post(JSON.stringify(base));
   expect((await post(bytes)).status).toBe(200);
