@@ -197,9 +197,11 @@ async function readDues(db: Db, key: TruckKey) {
     .where(
       and(
         ofTruck(rounds),
-        sql`(${rounds.kind}, ${rounds.doneOn}) in (select kind, max(done_on) from rounds where carrier_id = ${rounds.carrierId} and truck_id = ${rounds.truckId} group by kind)`,
+        // Without a name of its own the inner table would hide the outer one: every truck's rounds.
+        sql`(${rounds.kind}, ${rounds.doneOn}) in (select own.kind, max(own.done_on) from rounds own where own.carrier_id = ${rounds.carrierId} and own.truck_id = ${rounds.truckId} group by own.kind)`,
       ),
-    );
+    )
+    .orderBy(desc(rounds.doneAt), desc(rounds.id));
   const tests = await db
     .select({ kind: datedTests.kind, dueOn: datedTests.dueOn })
     .from(datedTests)
