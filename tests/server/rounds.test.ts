@@ -56,6 +56,8 @@ const walk = (
   wish: Parameters<typeof walkBody>[1] = {},
   age: Parameters<typeof sendWalk>[4] = {},
 ) => sendWalk(testDb(), driver, walkBody(truck, wish), clock, age);
+/** A walk with the weekly checks in it, which are due once a week has gone by. */
+const wholeWalk = () => walk({ answers: allGood(truck, "before", true) });
 const hoursRead = (value: number, age = {}) =>
   walk({ instead: { "cab.pump-hours": { kind: "reading", value, unit: "h" } } }, age);
 
@@ -72,21 +74,31 @@ const roundsOf = () =>
 test("a monthly round past its grace holds the truck from the shop's opening, and doing it frees it", async () => {
   // Due 2 July, five days of grace: it holds from 8 July, 06:00.
   clock.turn(Date.parse("2026-07-08T11:59:59Z") - clock.now().getTime());
-  expect(accepted(await walk()).standing).toBe("cleared");
+  expect(accepted(await wholeWalk()).standing).toBe("cleared");
   clock.turn(1000);
-  expect(accepted(await walk()).standing).toBe("held");
+  expect(accepted(await wholeWalk()).standing).toBe("held");
   expect(await reasonsNow()).toContain("round-overdue");
   const done = accepted(await record({ doneOn: "2026-07-08" }));
   expect(done.standing).toBe("cleared");
   expect((await truckRow(testDb(), truck)).standing).toBe("cleared");
 });
 
-test("a weekly round past its grace warns, never holds, and doing it ends the warning", async () => {
+test("a weekly round past its grace warns and never holds; done at the bench, a plain walk clears again", async () => {
   clock.turn(12 * DAY);
-  expect(accepted(await walk()).standing).toBe("cleared");
+  expect(accepted(await walk())).toMatchObject({ standing: "walk-due", clearsNot: "incomplete" });
   expect(await warningsNow()).toContain("weekly");
+  expect(await reasonsNow()).not.toContain("round-overdue");
   accepted(await record({ kind: "weekly", doneOn: "2026-06-14" }));
   expect(await warningsNow()).not.toContain("weekly");
+  expect(accepted(await walk())).toMatchObject({ standing: "cleared", clearsNot: null });
+});
+
+test("a walk names the weekly checks it lacks from the day the round is due, by the yard's day", async () => {
+  const lacks = weeklyDriver().map((check) => check.key);
+  clock.turn(Date.parse("2026-06-09T05:59:00Z") - clock.now().getTime());
+  expect(accepted(await walk()).missing).toEqual([]);
+  clock.turn(2 * 60_000);
+  expect(accepted(await walk()).missing.sort()).toEqual(lacks.sort());
 });
 
 test("a round of one kind does nothing for the other", async () => {
@@ -112,7 +124,7 @@ test("a round cannot be done tomorrow, by the yard's own day", async () => {
 test("a round entered late counts from the day it was done, and an older one replaces nothing", async () => {
   clock.turn(40 * DAY);
   expect(accepted(await record({ doneOn: "2026-06-04" })).standing).toBe("held");
-  accepted(await walk());
+  accepted(await wholeWalk());
   expect(accepted(await record({ doneOn: "2026-07-10" })).standing).toBe("cleared");
   expect(accepted(await record({ doneOn: "2026-06-20" })).standing).toBe("cleared");
 });
@@ -230,10 +242,22 @@ test("one weekly check left out, and it is no weekly round: the warning stays", 
   }
 });
 
-test("a walk that is not whole, or not before the day, is no weekly round", async () => {
+test("a weekly check not really made is no weekly round: could not check, off the scale, too short", async () => {
   const all = allGood(truck, "before", true);
-  const { "cab.horn": _horn, ...incomplete } = all;
-  expect(await weeklyFrom(incomplete)).toEqual([]);
+  const spoiled: Answers = {
+    "cab.tires-by-gauge": { kind: "could-not-check", reason: "No gauge aboard" },
+    "cab.tread": { kind: "reading", value: 999, unit: "in/32" },
+    "cab.released-leak-down": { kind: "timed", value: 1, unit: "psi", seconds: 5 },
+    "run-up.pressure": { kind: "could-not-check", reason: "Load aboard" },
+  };
+  for (const [key, answer] of Object.entries(spoiled)) {
+    expect(all[key], key).toBeDefined();
+    expect(await weeklyFrom({ ...all, [key]: answer }), key).toEqual([]);
+  }
+});
+
+test("the walk after the day's work is no weekly round", async () => {
+  const all = allGood(truck, "before", true);
   expect(await weeklyFrom({ ...all, ...allGood(truck, "after") }, { kind: "after" })).toEqual([]);
 });
 
