@@ -15,6 +15,8 @@ export interface WalkSheet {
   setupVersion: number;
   sheet: Sheet;
   madeHere: boolean;
+  /** Its row is stored already. */
+  kept: boolean;
 }
 
 /** The sheet a walk was made on: today's, an older one by its hash, or one nobody here made. */
@@ -23,7 +25,9 @@ export async function findSheet(db: Db, actor: Actor, body: WalkBody): Promise<W
   const today = await sheetForTruck(db, actor, body.truckId);
   if (!today.ok) return null;
   const { sheetId, hash, sheet, setupVersion } = today.value;
-  if (hash === body.sheetHash) return { id: sheetId, setupVersion, sheet, madeHere: true };
+  if (hash === body.sheetHash) {
+    return { id: sheetId, setupVersion, sheet, madeHere: true, kept: true };
+  }
   const [older] = await db
     .select()
     .from(sheetVersions)
@@ -36,24 +40,25 @@ export async function findSheet(db: Db, actor: Actor, body: WalkBody): Promise<W
     )
     .orderBy(desc(sheetVersions.setupVersion))
     .limit(1);
-  if (older) return { ...older, sheet: older.body as Sheet };
+  if (older) return { ...older, sheet: older.body as Sheet, kept: true };
   const sent = sheetSchema.safeParse(body.sheet);
   return {
     id: uuidv7(),
     setupVersion: 0,
     sheet: sent.success ? sent.data : sheet,
     madeHere: false,
+    kept: false,
   };
 }
 
-/** A sheet nobody here made is kept beside its walk, which clears nothing. */
+/** A sheet nobody here made is kept beside the first walk on it. None of its walks clears anything. */
 export async function keepUnknownSheet(
   change: GateChange,
   key: TruckKey,
   found: WalkSheet,
   hash: string,
 ): Promise<void> {
-  if (found.madeHere) return;
+  if (found.kept) return;
   await change.tx.insert(sheetVersions).values({
     ...key,
     id: found.id,

@@ -33,13 +33,17 @@ function tagRows(body: WalkBody, judged: Judgement, byKey: Map<string, Check>) {
     .map((tag) => {
       const check = byKey.get(tag.checkKey);
       const problem = check?.problems.find((known) => known.key === tag.problemKey);
+      const least = problem?.lowest ?? "white";
+      const colour = colourRank(tag.colour) < colourRank(least) ? least : tag.colour;
+      const part = problem?.part ?? check?.part ?? null;
       return {
         ...tag,
-        limit: tag.colour === "yellow" ? (problem?.limit ?? null) : null,
+        colour,
+        limit: colour === "yellow" ? (problem?.limit ?? null) : null,
         title: check ? `${check.label}: ${problem?.label ?? tag.problemKey}` : tag.problemKey,
-        part: check?.part ?? null,
+        part,
         fittingId: check?.fittingId ?? null,
-        roadSafety: check?.roadSafety ?? true,
+        roadSafety: check ? check.roadSafety || part !== null : true,
         driverFix: problem?.driverFix ?? false,
         remote: problem?.remote ?? false,
       };
