@@ -507,6 +507,20 @@ test("a tag the driver hung beside a good answer hangs too, with what the sheet 
   ]);
 });
 
+test("a tag hung beside is never lower than its problem, and knows the part at fault", async () => {
+  const brakes = tagged(truck, "pull-out.brakes", "weak", { colour: "white" });
+  const horn = tagged(truck, "approach.wrong-today", "horn", { colour: "white" });
+  const fuel = tagged(truck, "driver-side.fuel", "could-not-check", { colour: "white" });
+  const tags = [...brakes.tags, ...horn.tags, ...fuel.tags];
+  expect(accepted(await send(walkBody(truck, { tags }))).standing).toBe("held");
+  const hung = Object.fromEntries((await tagsOf(testDb(), truck)).map((tag) => [tag.id, tag]));
+  expect(tags.map(({ id }) => [hung[id]!.colour, hung[id]!.part, hung[id]!.roadSafety])).toEqual([
+    ["red", "service-brakes", true],
+    ["yellow", "horn", true],
+    ["yellow", null, false],
+  ]);
+});
+
 test("an unknown sheet is stored with the walk, never refused: tags hold, nothing clears", async () => {
   const db = testDb();
   const sheetHash = sha256("a sheet of last month");
@@ -522,6 +536,27 @@ test("an unknown sheet is stored with the walk, never refused: tags hold, nothin
   expect(kept?.body).toEqual(sheet);
   accepted(await signOff(db, mechanic, repaired(body.tags[0]!.id), clock));
   expect((await truckRow(db, truck)).standing).toBe("walk-due");
+});
+
+test("a second walk on the same unknown sheet clears nothing either", async () => {
+  const sheetHash = sha256("a sheet of last month");
+  const { sheet } = truck;
+  accepted(await send(walkBody(truck, { sheetHash, sheet })));
+  const second = accepted(await send(walkBody(truck, { sheetHash, sheet })));
+  expect(second).toMatchObject({ clearsNot: "sheet-unknown", standing: "walk-due" });
+});
+
+test("many first walks at once on one unknown sheet are all stored", async () => {
+  const sheetHash = sha256("a sheet of last month");
+  const { sheet } = truck;
+  const bodies = Array.from({ length: 6 }, () => walkBody(truck, { sheetHash, sheet }));
+  const results = await Promise.all(bodies.map((body) => send(body)));
+  expect(results.map(codeOf)).toEqual(bodies.map(() => "ok"));
+  const kept = await testDb()
+    .select()
+    .from(sheetVersions)
+    .where(and(eq(sheetVersions.truckId, truck.truckId), eq(sheetVersions.madeHere, false)));
+  expect(kept).toHaveLength(1);
 });
 
 test("an unknown sheet that is no sheet at all, or none, is no reason to refuse a walk", async () => {
