@@ -13,10 +13,23 @@ import type { WalkBody } from "./walk-schema";
 export interface WalkSheet {
   id: string;
   setupVersion: number;
+  /** What the walk is judged by. */
   sheet: Sheet;
   madeHere: boolean;
-  /** Its row is stored already. */
-  kept: boolean;
+  /** The sheet to be stored with the walk; null when it is stored already. */
+  toKeep: Sheet | null;
+}
+
+/** K10: a sheet nobody here made says what was found, never who may end it. */
+function withoutLeave(sheet: Sheet): Sheet {
+  const stations = sheet.stations.map((station) => ({
+    ...station,
+    checks: station.checks.map((check) => ({
+      ...check,
+      problems: check.problems.map((one) => ({ ...one, driverFix: false, remote: false })),
+    })),
+  }));
+  return { ...sheet, stations };
 }
 
 /** The sheet a walk was made on: today's, an older one by its hash, or one nobody here made. */
@@ -26,7 +39,7 @@ export async function findSheet(db: Db, actor: Actor, body: WalkBody): Promise<W
   if (!today.ok) return null;
   const { sheetId, hash, sheet, setupVersion } = today.value;
   if (hash === body.sheetHash) {
-    return { id: sheetId, setupVersion, sheet, madeHere: true, kept: true };
+    return { id: sheetId, setupVersion, sheet, madeHere: true, toKeep: null };
   }
   const [older] = await db
     .select()
@@ -40,15 +53,14 @@ export async function findSheet(db: Db, actor: Actor, body: WalkBody): Promise<W
     )
     .orderBy(desc(sheetVersions.setupVersion))
     .limit(1);
-  if (older) return { ...older, sheet: older.body as Sheet, kept: true };
+  if (older) {
+    const known = older.body as Sheet;
+    const judgedBy = older.madeHere ? known : withoutLeave(known);
+    return { ...older, sheet: judgedBy, toKeep: null };
+  }
   const sent = sheetSchema.safeParse(body.sheet);
-  return {
-    id: uuidv7(),
-    setupVersion: 0,
-    sheet: sent.success ? sent.data : sheet,
-    madeHere: false,
-    kept: false,
-  };
+  const toKeep = sent.success ? sent.data : sheet;
+  return { id: uuidv7(), setupVersion: 0, sheet: withoutLeave(toKeep), madeHere: false, toKeep };
 }
 
 /** A sheet nobody here made is kept beside the first walk on it. None of its walks clears anything. */
@@ -58,13 +70,13 @@ export async function keepUnknownSheet(
   found: WalkSheet,
   hash: string,
 ): Promise<void> {
-  if (found.kept) return;
+  if (found.toKeep === null) return;
   await change.tx.insert(sheetVersions).values({
     ...key,
     id: found.id,
     hash,
     setupVersion: found.setupVersion,
-    body: found.sheet,
+    body: found.toKeep,
     madeHere: false,
     createdAt: change.now,
   });
