@@ -546,6 +546,29 @@ test("a second walk on the same unknown sheet clears nothing either", async () =
   expect(second).toMatchObject({ clearsNot: "sheet-unknown", standing: "walk-due" });
 });
 
+test("K10: an unknown sheet opens no driver-fix and no sign-off from photos, the first time or the second", async () => {
+  const db = testDb();
+  await changePolicy(db, manager, { ...DEFAULT_POLICY, driverFix: true }, clock);
+  const sheet = structuredClone(truck.sheet);
+  for (const check of sheet.stations.flatMap((station) => station.checks)) {
+    Object.assign(check, { roadSafety: false, part: null });
+    for (const problem of check.problems) Object.assign(problem, { driverFix: true, remote: true });
+  }
+  const sheetHash = sha256("a sheet of one's own");
+  for (const problemKey of ["weak", "pulls"]) {
+    const body = walkBody(truck, {
+      sheetHash,
+      sheet,
+      ...tagged(truck, "pull-out.brakes", problemKey),
+    });
+    accepted(await send(body));
+    const end = repaired(body.tags[0]!.id);
+    expect(codeOf(await signOff(db, driver, end, clock))).toBe("own-red-tag");
+    const remote = { ...repaired(body.tags[0]!.id), remote: true };
+    expect(codeOf(await signOff(db, mechanic, remote, clock))).toBe("not-from-photos");
+  }
+});
+
 test("many first walks at once on one unknown sheet are all stored", async () => {
   const sheetHash = sha256("a sheet of last month");
   const { sheet } = truck;
