@@ -1,3 +1,4 @@
+import { and, desc, eq, lte } from "drizzle-orm";
 import { z } from "zod";
 import type { Db } from "../../db/client";
 import { rounds } from "../../db/schema/trucks";
@@ -6,10 +7,11 @@ import { type Clock, systemClock } from "../../services/clock";
 import type { StandingWord } from "../../trade/standing/standing";
 import type { Actor } from "../actor";
 import { changeTruck } from "../gate/change-truck";
+import type { TruckKey } from "../gate/read-facts";
 import { once, submissionOf } from "../receipts/once";
 import { ok, type Result } from "../refusals";
 import { yardOfTruck } from "../tags/yard-of-truck";
-import { yardDay } from "../yard-day";
+import { addDays, yardDay, yardInstant } from "../yard-day";
 
 export const recordRoundSchema = z.object({
   id: z.uuid(),
@@ -19,6 +21,30 @@ export const recordRoundSchema = z.object({
   pumpHours: z.number().min(0).max(200_000).nullable(),
 });
 export type RecordRoundInput = z.infer<typeof recordRoundSchema>;
+
+/** Hours of a day gone by are older than any reading since: they do not turn the truck's hours back. */
+function endOfDay(day: string, zone: string, now: Date): Date {
+  const end = yardInstant(addDays(day, 1), 0, zone);
+  return end < now ? end : now;
+}
+
+/** The pump's hours as last read before an instant: a round done without them counts from there. */
+async function hoursAt(tx: Db, key: TruckKey, at: Date): Promise<number | null> {
+  const [row] = await tx
+    .select({ si: readings.si })
+    .from(readings)
+    .where(
+      and(
+        eq(readings.carrierId, key.carrierId),
+        eq(readings.truckId, key.truckId),
+        eq(readings.quantity, "pump-hours"),
+        lte(readings.countsFrom, at),
+      ),
+    )
+    .orderBy(desc(readings.countsFrom), desc(readings.id))
+    .limit(1);
+  return row?.si ?? null;
+}
 
 /** A weekly or monthly round done at the bench. A day to come is refused. */
 export async function recordRound(
@@ -39,6 +65,8 @@ export async function recordRound(
         if (input.doneOn > yardDay(change.now, zone).day) {
           change.deny("invalid", { fields: [{ pointer: "/doneOn", code: "date-future" }] });
         }
+        const readAt = endOfDay(input.doneOn, zone, change.now);
+        const pumpHours = input.pumpHours ?? (await hoursAt(change.tx, key, readAt));
         await change.tx.insert(rounds).values({
           ...key,
           id: input.id,
@@ -46,7 +74,7 @@ export async function recordRound(
           doneOn: input.doneOn,
           doneAt: change.now,
           doneBy: personId,
-          pumpHours: input.pumpHours,
+          pumpHours,
         });
         if (input.pumpHours !== null) {
           await change.tx.insert(readings).values({
@@ -54,7 +82,7 @@ export async function recordRound(
             id: input.id,
             checkKey: "round.pump-hours",
             quantity: "pump-hours",
-            countsFrom: change.now,
+            countsFrom: readAt,
             entered: input.pumpHours,
             unit: "h",
             si: input.pumpHours,
