@@ -208,6 +208,25 @@ test("hours that fall, as on a new meter, count from the newest reading on", asy
   expect((await truckRow(testDb(), truck)).pumpHours).toBe(3);
 });
 
+test("a round entered late, with the hours of its day, does not turn the truck's hours back", async () => {
+  clock.turn(3 * DAY);
+  accepted(await hoursRead(900));
+  clock.turn(60_000);
+  accepted(await record({ doneOn: "2026-06-03", pumpHours: 850 }));
+  expect((await truckRow(testDb(), truck)).pumpHours).toBe(900);
+  accepted(await record({ doneOn: "2026-06-05", pumpHours: 901 }));
+  expect((await truckRow(testDb(), truck)).pumpHours).toBe(901);
+});
+
+test("a monthly round done without its hours counts from the hours last read before it", async () => {
+  const settings = { ...DEFAULT_POLICY, monthlyEveryHours: 100, monthlyGraceHours: 25 };
+  await changePolicy(testDb(), manager, settings, clock);
+  expect(accepted(await hoursRead(600)).standing).toBe("held");
+  clock.turn(60_000);
+  expect(accepted(await record()).standing).toBe("cleared");
+  expect((await truckRow(testDb(), truck)).roundsBlockHours).toBe(725);
+});
+
 const weeklyDriver = () =>
   allChecks(truck.sheet).filter((check) => check.cadence === "weekly" && check.who === "driver");
 
