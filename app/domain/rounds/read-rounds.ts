@@ -50,7 +50,7 @@ export async function readRounds(
     .where(
       and(
         eq(rounds.carrierId, carrierId),
-        sql`(${rounds.truckId}, ${rounds.kind}, ${rounds.doneOn}) in (select truck_id, kind, max(done_on) from rounds where carrier_id = ${rounds.carrierId} group by truck_id, kind)`,
+        sql`(${rounds.truckId}, ${rounds.kind}, ${rounds.doneOn}) in (select own.truck_id, own.kind, max(own.done_on) from rounds own where own.carrier_id = ${rounds.carrierId} group by own.truck_id, own.kind)`,
       ),
     );
   const driven = await db
