@@ -8,6 +8,7 @@ interface Issue {
   message: string;
   path: readonly PropertyKey[];
   origin?: unknown;
+  format?: unknown;
   input?: unknown;
 }
 
@@ -17,7 +18,7 @@ function keyOf(issue: Issue): string {
   if (issue.code === "too_small") return issue.origin === "string" ? "fill-in" : "zero-or-more";
   if (issue.code === "too_big") return issue.origin === "string" ? "too-long" : "too-large";
   if (/NaN|expected number/.test(issue.message)) return "not-a-number";
-  return issue.code === "invalid_format" ? "date-form" : "choose-one";
+  return issue.format === "date" ? "date-form" : "choose-one";
 }
 
 /** What a schema found wrong, at the form's fields. `names` renames where the form's name is another. */

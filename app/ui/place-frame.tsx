@@ -10,10 +10,12 @@ export function PlaceFrame({
   wide,
   children,
 }: {
-  frame: { name: string; carrier: string; places: { to: string; label: string }[] };
+  /** Null where not even that could be read. */
+  frame: { name: string; carrier: string; places: { to: string; label: string }[] } | null;
   wide?: boolean;
   children: ReactNode;
 }) {
+  if (!frame) return <PageFrame wide={wide}>{children}</PageFrame>;
   const { name, carrier, places } = frame;
   return (
     <PageFrame

@@ -15,11 +15,12 @@ export interface TagCardProps {
   /** What is wrong: "Float ball missing". */
   title: string;
   /** Part or place: "Primary trap". */
-  where: string;
+  where?: string;
   /** When and by whom, as a `<Time>` or words. */
   since: ReactNode;
   /** What a yellow tag forbids, in words. */
   limit?: string;
+  /** How many there are; left out where they are not shown. */
   photos?: number;
   to?: string;
   heading?: "h2" | "h3";
@@ -34,7 +35,7 @@ export function TagCard({
   where,
   since,
   limit,
-  photos = 0,
+  photos,
   to,
   heading: Heading = "h3",
   children,
@@ -45,7 +46,7 @@ export function TagCard({
       <div className="p-4">
         <p className="flex flex-wrap items-center justify-between gap-x-4 text-sm">
           <TagGlyph colour={colour} />
-          <span className="text-mute">{uiText.photos(photos)}</span>
+          {photos !== undefined && <span className="text-mute">{uiText.photos(photos)}</span>}
         </p>
         <Heading className="mt-2 text-lg font-bold leading-tight">
           {to ? (
@@ -56,7 +57,7 @@ export function TagCard({
             title
           )}
         </Heading>
-        <p className="text-mute">{where}</p>
+        {where && <p className="text-mute">{where}</p>}
         {limit && (
           <p className="mt-2 border-l-4 border-yellow pl-3">
             <strong>{uiText.limit}:</strong> {limit}

@@ -1,8 +1,9 @@
-import { getFormProps, getInputProps, useForm } from "@conform-to/react";
+import { getFormProps, useForm } from "@conform-to/react";
 import { parseWithZod } from "@conform-to/zod/v4";
-import { data, Form, Link, redirect } from "react-router";
+import { data, Form, redirect } from "react-router";
 import { z } from "zod";
 import { firstPlace } from "~/auth/first-place";
+import { frameOf } from "~/auth/frame-of";
 import { requirePermission, requireSignedIn } from "~/auth/require-permission";
 import { dbOf } from "~/context";
 import { changeOwnPhone, readOwnAccount, switchCarrier } from "~/domain/people/own-account";
@@ -16,8 +17,12 @@ import { phoneSchema } from "~/domain/people/person-input";
 import { refusedForm, unparsedForm } from "~/http/form-reply";
 import { systemClock } from "~/services/clock";
 import { accountText } from "~/text/en/people";
-import { refusalText } from "~/text/en/refusals";
 import { roleText } from "~/text/en/roles";
+import { Button, ButtonLink } from "~/ui/button";
+import { TextField } from "~/ui/fields/text-field";
+import { Notice } from "~/ui/notice";
+import { PageTitle } from "~/ui/page-frame";
+import { PlaceFrame } from "~/ui/place-frame";
 import type { Route } from "./+types/account";
 
 const schema = z.discriminatedUnion("intent", [
@@ -35,7 +40,8 @@ export async function loader({ context, url }: Route.LoaderArgs) {
   const sessions = await listSessions(db, actor, systemClock.now());
   const { name, roles, carrierId } = actor;
   const done = url.searchParams.get("done");
-  return { ...account, sessions, sessionId, name, roles, carrierId, carrierName, done };
+  const frame = frameOf(context);
+  return { ...account, frame, sessions, sessionId, name, roles, carrierId, carrierName, done };
 }
 
 export async function action({ request, context }: Route.ActionArgs) {
@@ -64,37 +70,34 @@ export async function action({ request, context }: Route.ActionArgs) {
 }
 
 export default function Account({ loaderData, actionData }: Route.ComponentProps) {
-  const { name, roles, carrierName, carriers, email, sessions, sessionId, done } = loaderData;
+  const { frame, name, roles, carrierName, carriers, email, sessions, sessionId, done } =
+    loaderData;
   const words = roles.map((role) => roleText[role]).join(", ");
   return (
-    <main className="mx-auto max-w-2xl px-4 py-8">
-      <h1 className="text-3xl font-bold">{accountText.title}</h1>
-      <p className="mt-1 text-xl">{name}</p>
-      <p className="text-mute">{accountText.as(words, carrierName)}</p>
-      <div className="mt-5 flex flex-wrap gap-3">
-        <Link
-          to={firstPlace(loaderData)}
-          className="inline-flex min-h-11 items-center rounded-sm bg-enamel px-5 py-2 font-bold text-card no-underline"
+    <PlaceFrame frame={frame}>
+      <div className="max-w-2xl">
+        <PageTitle
+          title={accountText.title}
+          lead={`${name}. ${accountText.as(words, carrierName)}`}
         >
-          {accountText.toWork}
-        </Link>
-        <Form method="post" action="/sign-out">
-          <QuietButton>{accountText.signOut}</QuietButton>
-        </Form>
+          <ButtonLink kind="main" to={firstPlace(loaderData)}>
+            {accountText.toWork}
+          </ButtonLink>
+        </PageTitle>
+        {isNote(done) && (
+          <Notice tone="good" announce>
+            {NOTES[done]}
+          </Notice>
+        )}
+        <Section title={accountText.email}>
+          <p className="break-words">{email}</p>
+          <p className="text-base text-mute">{accountText.emailHint}</p>
+        </Section>
+        <Phone phone={loaderData.phone} result={actionData?.result} />
+        {carriers.length > 1 && <Carriers carriers={carriers} here={loaderData.carrierId} />}
+        <Devices sessions={sessions} current={sessionId} />
       </div>
-      {isNote(done) && (
-        <p role="status" className="mt-6 border-l-4 border-green bg-card p-3">
-          {NOTES[done]}
-        </p>
-      )}
-      <Section title={accountText.email}>
-        <p className="break-words">{email}</p>
-        <p className="text-base text-mute">{accountText.emailHint}</p>
-      </Section>
-      <Phone phone={loaderData.phone} result={actionData?.result} />
-      {carriers.length > 1 && <Carriers carriers={carriers} here={loaderData.carrierId} />}
-      <Devices sessions={sessions} current={sessionId} />
-    </main>
+    </PlaceFrame>
   );
 }
 
@@ -117,16 +120,6 @@ function Section({ title, children }: { title: string; children: React.ReactNode
   );
 }
 
-function QuietButton(props: React.ComponentProps<"button">) {
-  return (
-    <button
-      type="submit"
-      {...props}
-      className="min-h-11 rounded-sm border border-mute px-4 py-1 text-ink"
-    />
-  );
-}
-
 type Reply = NonNullable<Route.ComponentProps["actionData"]>["result"];
 
 function Phone({ phone, result }: { phone: string | null; result: Reply | undefined }) {
@@ -135,38 +128,19 @@ function Phone({ phone, result }: { phone: string | null; result: Reply | undefi
     lastResult: result,
     defaultValue: { phone: phone ?? "" },
   });
-  const { key, ...input } = getInputProps(fields.phone, { type: "tel" });
-  const fault = fields.phone.errors?.[0];
   return (
     <Section title={accountText.phone}>
-      <Form method="post" {...getFormProps(form)} className="flex flex-wrap items-start gap-3">
+      <Form method="post" {...getFormProps(form)} className="max-w-sm space-y-3">
         <input type="hidden" name="intent" value="phone" />
-        <div className="min-w-60 flex-1">
-          <label htmlFor={fields.phone.id} className="sr-only">
-            {accountText.phone}
-          </label>
-          <input
-            key={key}
-            {...input}
-            autoComplete="tel"
-            required={false}
-            aria-describedby={
-              fault
-                ? `${fields.phone.errorId} ${fields.phone.descriptionId}`
-                : fields.phone.descriptionId
-            }
-            className="min-h-11 w-full rounded-sm border border-mute bg-card px-3 py-2 tabular-nums aria-invalid:border-2 aria-invalid:border-red"
-          />
-          {fault && (
-            <p id={fields.phone.errorId} role="alert" className="mt-1 font-bold text-red">
-              {refusalText.field(fault)}
-            </p>
-          )}
-          <p id={fields.phone.descriptionId} className="mt-1 text-base text-mute">
-            {accountText.phoneHint}
-          </p>
-        </div>
-        <QuietButton>{accountText.savePhone}</QuietButton>
+        <TextField
+          field={fields.phone}
+          label={accountText.phone}
+          hint={accountText.phoneHint}
+          type="tel"
+          autoComplete="tel"
+          optional
+        />
+        <Button type="submit">{accountText.savePhone}</Button>
       </Form>
     </Section>
   );
@@ -187,9 +161,9 @@ function Carriers({ carriers, here }: { carriers: { id: string; name: string }[]
               {name} · {accountText.here}
             </p>
           ) : (
-            <QuietButton key={id} name="carrierId" value={id}>
+            <Button type="submit" key={id} name="carrierId" value={id}>
               {accountText.switchTo(name)}
-            </QuietButton>
+            </Button>
           ),
         )}
       </Form>
@@ -216,13 +190,14 @@ function Devices({ sessions, current }: { sessions: OwnSession[]; current: strin
               ) : (
                 <Form method="post">
                   <input type="hidden" name="sessionId" value={id} />
-                  <QuietButton
+                  <Button
+                    type="submit"
                     name="intent"
                     value="end"
                     aria-label={accountText.endOf(name, createdAt)}
                   >
                     {accountText.end}
-                  </QuietButton>
+                  </Button>
                 </Form>
               )}
             </li>
@@ -231,9 +206,9 @@ function Devices({ sessions, current }: { sessions: OwnSession[]; current: strin
       </ul>
       {sessions.length > 1 && (
         <Form method="post" className="mt-4">
-          <QuietButton name="intent" value="end-others">
+          <Button type="submit" name="intent" value="end-others">
             {accountText.endOthers}
-          </QuietButton>
+          </Button>
         </Form>
       )}
     </Section>

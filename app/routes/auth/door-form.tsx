@@ -1,6 +1,8 @@
 import type { FieldMetadata } from "@conform-to/react";
 import type { ComponentProps, ReactNode } from "react";
 import { refusalText } from "~/text/en/refusals";
+import { Button } from "~/ui/button";
+import { CONTROL } from "~/ui/fields/field";
 
 /** What went wrong, said to a screen reader at once. */
 export function Fault({ id, children }: { id?: string; children: ReactNode }) {
@@ -33,7 +35,7 @@ export function DoorField({ field, label, hint, input }: DoorFieldProps) {
         required={false}
         aria-invalid={fault ? true : undefined}
         aria-describedby={fault ? `${field.errorId} ${field.descriptionId}` : field.descriptionId}
-        className={`mt-2 min-h-14 w-full rounded-sm border border-mute bg-paper px-3 py-2 text-ink aria-invalid:border-2 aria-invalid:border-red ${className}`}
+        className={`${CONTROL} mt-2 min-h-14 w-full ${className}`}
       />
       {fault && <Fault id={field.errorId}>{refusalText.field(fault)}</Fault>}
       <p id={field.descriptionId} className="mt-2 text-mute">
@@ -43,7 +45,7 @@ export function DoorField({ field, label, hint, input }: DoorFieldProps) {
   );
 }
 
-interface DoorButtonProps extends ComponentProps<"button"> {
+interface DoorButtonProps extends Omit<ComponentProps<"button">, "type"> {
   busy: boolean;
   busyLabel: string;
   quiet?: boolean;
@@ -51,15 +53,16 @@ interface DoorButtonProps extends ComponentProps<"button"> {
 
 /** The one thing to do, or a quieter one beside it. While it works it says so and takes no second press. */
 export function DoorButton({ busy, busyLabel, quiet = false, children, ...rest }: DoorButtonProps) {
-  const look = quiet ? "border border-mute text-ink" : "w-full bg-enamel text-card";
   return (
-    <button
+    <Button
       type="submit"
-      disabled={busy}
+      size="walk"
+      kind={quiet ? "quiet" : "main"}
+      wide={!quiet}
+      busy={busy && busyLabel}
       {...rest}
-      className={`min-h-14 rounded-sm px-5 py-2 font-bold disabled:opacity-70 ${look}`}
     >
-      {busy ? busyLabel : children}
-    </button>
+      {children}
+    </Button>
   );
 }

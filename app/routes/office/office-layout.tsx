@@ -1,16 +1,15 @@
 import type { ReactNode } from "react";
-import { Form, NavLink, Outlet, useRouteLoaderData } from "react-router";
-import { requirePermission, requireSignedIn } from "~/auth/require-permission";
+import { NavLink, Outlet, useRouteLoaderData } from "react-router";
+import { frameOf } from "~/auth/frame-of";
+import { requirePermission } from "~/auth/require-permission";
 import { office } from "~/text/en/office";
-import { uiText } from "~/text/en/ui";
-import { Button } from "~/ui/button";
-import { PageFrame } from "~/ui/page-frame";
+import { PlaceFrame } from "~/ui/place-frame";
 import type { Route } from "./+types/office-layout";
 import { OfficeError } from "./page-parts";
 
 export function loader({ context }: Route.LoaderArgs) {
-  const actor = requirePermission(context, "truck.manage");
-  return { name: actor.name, carrier: requireSignedIn(context).carrierName };
+  requirePermission(context, "truck.manage");
+  return { frame: frameOf(context) };
 }
 
 const PARTS = [
@@ -31,16 +30,9 @@ export default function OfficeLayout() {
 }
 
 function Frame({ children }: { children: ReactNode }) {
-  const person = useRouteLoaderData<typeof loader>("routes/office/office-layout");
+  const read = useRouteLoaderData<typeof loader>("routes/office/office-layout");
   return (
-    <PageFrame
-      person={person && { ...person, to: "/account" }}
-      out={
-        <Form method="post" action="/sign-out">
-          <Button type="submit">{uiText.signOut}</Button>
-        </Form>
-      }
-    >
+    <PlaceFrame frame={read?.frame ?? null}>
       <nav aria-label={office.sections} className="mb-6 border-b border-line print:hidden">
         <ul className="flex flex-wrap gap-x-6">
           {PARTS.map(({ to, label, end }) => (
@@ -57,7 +49,7 @@ function Frame({ children }: { children: ReactNode }) {
         </ul>
       </nav>
       {children}
-    </PageFrame>
+    </PlaceFrame>
   );
 }
 

@@ -2,7 +2,6 @@ import { Form } from "react-router";
 import type { readBrief } from "~/domain/brief/read-brief";
 import { benchText } from "~/text/en/bench";
 import { limitText, tagTitle } from "~/text/en/gate";
-import { tagText } from "~/text/en/ui";
 import { walkText } from "~/text/en/walk";
 import { Button } from "~/ui/button";
 import { plainField } from "~/ui/fields/field-shape";
@@ -46,7 +45,6 @@ export function Brief({ brief, ...form }: BriefProps) {
           key={tag.id}
           colour={tag.colour}
           title={tagTitle(tag.title)}
-          where={tagText[tag.colour]}
           since={<Time at={new Date(tag.raisedAt)} zone={yard.zone} />}
           limit={tag.limit ? limitText(tag.limit) : undefined}
           heading="h3"

@@ -5,7 +5,6 @@ export const authText = {
 } as const;
 
 export const doorText = {
-  wordmark: "Keypeg",
   motto: "The key stays on the peg until the truck is right.",
 } as const;
 
