@@ -501,3 +501,15 @@ test("in winter a frozen drain is named and an iced ladder is not climbed", () =
     limit: { kind: "no-pressure-off-load" },
   });
 });
+
+test("what could not be checked at a lock of the run-up keeps it locked: never white, never lowered", () => {
+  for (const truck of Object.values(FIVE_TRUCKS)) {
+    for (const yard of [{ elevationM: 240 }, { elevationM: 240, winter: true }]) {
+      for (const check of runUpLocks(sheetOf({ ...truck, yard }))) {
+        const problem = check.problems.find((one) => one.key === "could-not-check");
+        expect(problem?.colour, check.key).not.toBe("white");
+        expect(problem?.lowest, check.key).toBe(problem?.colour);
+      }
+    }
+  }
+});

@@ -77,7 +77,8 @@ function couldNotCheck(truck: TruckParts, entry: CheckEntry, own: readonly Probl
     return { colour, lowest, limit: lowest === "red" ? null : limitFor(truck, limit) };
   }
   const colour = worst(own);
-  const lowest = isRoadSafety(entry) ? colour : DOWN[colour];
+  const kept = isRoadSafety(entry) || entry.locksRunUp || entry.half !== undefined;
+  const lowest = kept ? colour : DOWN[colour];
   const limit = own.find((problem) => problem.colour === "yellow" && problem.limit)?.limit ?? null;
   return { colour, lowest, limit: lowest === "red" ? null : limit };
 }
