@@ -69,10 +69,10 @@ export function foldLimits(limits: readonly Limit[]): LimitsInForce {
         folded.vacuumPa = lower(folded.vacuumPa, Math.round(limit.vacuumPa));
         break;
       case "fill-no-more":
-        folded.fillL = lower(folded.fillL, Math.floor(limit.fillL));
+        folded.fillL = lower(folded.fillL, Math.round(limit.fillL));
         break;
       case "hose-no-longer":
-        folded.hoseMm = lower(folded.hoseMm, Math.floor(limit.hoseM * 1000));
+        folded.hoseMm = lower(folded.hoseMm, Math.round(limit.hoseM * 1000));
         break;
       default:
         folded.mask |= LIMIT_BITS[limit.kind];
@@ -89,7 +89,7 @@ export interface NeedsMask {
   hoseMm: number | null;
 }
 
-/** Turns needs into the gate's numbers: bits for what is forbidden, and Pa, L and mm rounded up. */
+/** Turns needs into the gate's numbers: bits for what is forbidden, and whole Pa, L and mm, rounded as limits are: a full tank is no more than the tank. */
 export function needsMask(needs: Needs): NeedsMask {
   const answered =
     needs.pressureOffLoad !== null &&
@@ -107,7 +107,7 @@ export function needsMask(needs: Needs): NeedsMask {
   return {
     mask,
     vacuumPa: needs.vacuumPa === null ? null : Math.round(needs.vacuumPa),
-    fillL: needs.fillL === null ? null : Math.ceil(needs.fillL),
-    hoseMm: needs.hoseM === null ? null : Math.ceil(needs.hoseM * 1000),
+    fillL: needs.fillL === null ? null : Math.round(needs.fillL),
+    hoseMm: needs.hoseM === null ? null : Math.round(needs.hoseM * 1000),
   };
 }

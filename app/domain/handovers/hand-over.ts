@@ -116,8 +116,8 @@ async function commitHandover(
       towing: input.needs.towing!,
       hazmat: input.needs.hazmat!,
       vacuumPa: Math.round(input.needs.vacuumPa!),
-      fillL: Math.ceil(input.needs.fillL!),
-      hoseMm: Math.ceil(input.needs.hoseM! * 1000),
+      fillL: Math.round(input.needs.fillL!),
+      hoseMm: Math.round(input.needs.hoseM! * 1000),
       createdAt: decidedAt,
     });
     const { facts } = await readFacts(tx, key, policy.settings, decidedAt);

@@ -4,8 +4,8 @@ import type { Reason } from "../../trade/standing/standing";
 import { fromSi } from "../../trade/units";
 
 const inches = (pa: number) => `${Math.round(fromSi(pa, "inHg") * 10) / 10} inHg`;
-const gallons = (liters: number) => `${Math.floor(fromSi(liters / 1000, "gal"))} gal`;
-const feet = (meters: number) => `${Math.floor(fromSi(meters, "ft"))} ft`;
+const gallons = (liters: number) => `${Math.floor(fromSi(liters / 1000, "gal") + 0.1)} gal`;
+const feet = (meters: number) => `${Math.floor(fromSi(meters, "ft") + 0.01)} ft`;
 
 /** A limit in words, with its number. */
 export function limitText(limit: Limit): string {

@@ -18,9 +18,9 @@ function against(limit: Limit, needs: NeedsMask): boolean {
     case "vacuum-no-deeper":
       return (needs.vacuumPa ?? 0) > Math.round(limit.vacuumPa);
     case "fill-no-more":
-      return (needs.fillL ?? 0) > Math.floor(limit.fillL);
+      return (needs.fillL ?? 0) > Math.round(limit.fillL);
     case "hose-no-longer":
-      return (needs.hoseMm ?? 0) > Math.floor(limit.hoseM * 1000);
+      return (needs.hoseMm ?? 0) > Math.round(limit.hoseM * 1000);
     default:
       return ((needs.mask ?? 0) & LIMIT_BITS[limit.kind]) !== 0;
   }
@@ -42,7 +42,7 @@ function needReasons(
   for (const limit of cannot) {
     if (against(limit, needs)) reasons.push({ code: "not-built-for", limit });
   }
-  if (tankL !== null && needs.fillL !== null && needs.fillL > Math.floor(tankL)) {
+  if (tankL !== null && needs.fillL !== null && needs.fillL > Math.round(tankL)) {
     reasons.push({ code: "over-tank", tankL });
   }
   return reasons;

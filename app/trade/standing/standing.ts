@@ -73,7 +73,7 @@ function gateColumns(facts: StandingFacts, limits: Limit[]): GateColumns {
     roundsBlockHours: earliest(facts.rounds.map((round) => round.holdsAtHours)),
     limits: {
       ...folded,
-      fillL: earliest([folded.fillL, facts.tankL === null ? null : Math.floor(facts.tankL)]),
+      fillL: earliest([folded.fillL, facts.tankL === null ? null : Math.round(facts.tankL)]),
     },
   };
 }
