@@ -18,6 +18,7 @@ import {
   HOUR,
   makeTruckToWalk,
   sendWalk,
+  sha256,
   type TruckToWalk,
   tagged,
   walkBody,
@@ -288,4 +289,17 @@ test("a weekly check with a problem is done, and hangs its tag", async () => {
   );
   expect(done).toHaveLength(1);
   expect((await truckRow(testDb(), truck)).openReds).toBe(1);
+});
+
+test("a walk that is not believed is no weekly round: unknown sheet, unknown age, a clock that jumped", async () => {
+  const all = allGood(truck, "before", true);
+  const sheetHash = sha256("a sheet of nobody here");
+  expect(await weeklyFrom(all, { sheetHash, sheet: truck.sheet })).toEqual([]);
+  const ages = [
+    { ageMs: null },
+    { ageMs: -1 },
+    { ageMs: 25 * HOUR },
+    { ageMs: 0, clockJumped: true },
+  ];
+  for (const age of ages) expect(await weeklyFrom(all, {}, age), JSON.stringify(age)).toEqual([]);
 });
