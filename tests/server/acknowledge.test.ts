@@ -17,6 +17,7 @@ import { testDb } from "./database";
 import { makeCarrier, makePerson, type TestCarrier, TestClock, truckRow } from "./factories";
 import {
   accepted,
+  allGood,
   codeOf,
   HOUR,
   makeTruckToWalk,
@@ -312,7 +313,10 @@ test("K4: the same acknowledgement ten times at once is one; the same id with ot
 
 test("a sign-off older than the review window needs no acknowledgement", async () => {
   await repair(await hang(first, ["rear.lamps", "tail"]));
-  clock.turn(31 * 24 * HOUR);
+  clock.turn(29 * 24 * HOUR);
+  accepted(await send(next, { answers: allGood(truck, "before", true) }));
+  expect(await mayClear(next)).toBe(false);
+  clock.turn(2 * 24 * HOUR);
   accepted(await send(next));
   expect(await mayClear(next)).toBe(true);
 });
