@@ -106,6 +106,7 @@ test("a whole good walk clears the truck for its driver alone, in one transactio
     standing: "cleared",
     clearsNot: null,
     missing: [],
+    faults: [],
     tags: [],
     photosMissing: [],
   });
@@ -643,9 +644,10 @@ test("the number of statements does not grow with answers, tags, photos or seen 
       check.problems.some((problem) => problem.colour === "red") &&
       allGood(truck)[check.key] !== undefined,
   );
-  const record = async (count: number) => {
+  // What hangs already is not hung again, so each walk finds something new.
+  const record = async (from: number, count: number) => {
     const open = (await tagsOf(testDb(), truck)).slice(0, count);
-    const found = lookDue.slice(0, count).map((check) => {
+    const found = lookDue.slice(from, from + count).map((check) => {
       const problem = check.problems.find((one) => one.colour === "red")!;
       return tagged(truck, check.key, problem.key);
     });
@@ -674,11 +676,48 @@ test("the number of statements does not grow with answers, tags, photos or seen 
     accepted(await sendWalk(counted, driver, body, clock));
     return statements.length;
   };
-  await record(2);
-  const few = await record(2);
-  const many = await record(20);
+  await record(0, 2);
+  const few = await record(2, 2);
+  const many = await record(4, lookDue.length - 4);
+  expect(lookDue.length).toBeGreaterThan(14);
   expect(few).toBeGreaterThan(10);
   expect(many).toBe(few);
+});
+
+test("a defect found again while its tag hangs is no second tag, and its photo belongs to the one that hangs", async () => {
+  const db = testDb();
+  const first = walkBody(truck, tagged(truck, "rear.lamps", "tail"));
+  accepted(await send(first));
+  const found = tagged(truck, "rear.lamps", "tail");
+  const photo = {
+    id: uuidv7(),
+    tagId: found.tags[0]!.id,
+    sha256: sha256("again"),
+    bytes: 5,
+  };
+  const receipt = accepted(await send(walkBody(truck, { ...found, photos: [photo] })));
+  expect(receipt.tags).toEqual([]);
+  expect(receipt.photosMissing).toEqual([photo.id]);
+  expect(await tagsOf(db, truck)).toHaveLength(1);
+  const [promised] = await db.select().from(photos).where(eq(photos.id, photo.id));
+  expect(promised?.tagId).toBe(first.tags[0]!.id);
+});
+
+test("a defect found worse than its tag hangs a new one in the worse colour", async () => {
+  const marker = tagged(truck, "curb-side.lamps", "marker");
+  accepted(await send(walkBody(truck, marker)));
+  const worse = tagged(truck, "curb-side.lamps", "marker", { colour: "red" });
+  const receipt = accepted(await send(walkBody(truck, worse)));
+  expect(receipt.tags.map((tag) => tag.colour)).toEqual(["red"]);
+  expect(receipt.standing).toBe("held");
+});
+
+test("the receipt says why an answer does not stand", async () => {
+  const body = walkBody(truck, {
+    instead: { "run-up.vacuum": { kind: "reading", value: 99, unit: "inHg", heardItOpen: true } },
+  });
+  const receipt = accepted(await send(body));
+  expect(receipt.faults).toEqual([{ checkKey: "run-up.vacuum", code: "off-scale" }]);
 });
 
 test("K10: a driver does not sign off a red tag of their own walk, certifier or not", async () => {

@@ -10,6 +10,7 @@ import { changeTruck, type GateChange } from "../gate/change-truck";
 import { once, type Submission, submissionOf } from "../receipts/once";
 import { ok, type Result } from "../refusals";
 import { signatureSchema } from "../signature";
+import { queueRedTags } from "../tags/red-tag-mail";
 
 export const acknowledgeSchema = z.object({
   id: z.uuid(),
@@ -67,6 +68,8 @@ async function hangDispute(
   });
   change.moveTags();
   change.note("tag", id, { colour: "red" });
+  const tag = { id, colour: "red" as const, title: "not-satisfied" };
+  await queueRedTags(change, { carrierId, truckId: input.truckId }, [tag]);
 }
 
 /** Stores an acknowledgement inside a change that is under way (a walk carries one too). */

@@ -3,6 +3,7 @@ import { hours } from "../durations";
 /** Why a walk clears nothing although its tags hold. */
 export type ClearsNot =
   | "incomplete"
+  | "setup-changed"
   | "age-unknown"
   | "age-negative"
   | "age-over-24h"

@@ -16,6 +16,8 @@ export interface WalkSheet {
   /** What the walk is judged by. */
   sheet: Sheet;
   madeHere: boolean;
+  /** Fittings or set points have changed since it was made. */
+  outdated: boolean;
   /** The sheet to be stored with the walk; null when it is stored already. */
   toKeep: Sheet | null;
 }
@@ -39,7 +41,7 @@ export async function findSheet(db: Db, actor: Actor, body: WalkBody): Promise<W
   if (!today.ok) return null;
   const { sheetId, hash, sheet, setupVersion } = today.value;
   if (hash === body.sheetHash) {
-    return { id: sheetId, setupVersion, sheet, madeHere: true, toKeep: null };
+    return { id: sheetId, setupVersion, sheet, madeHere: true, outdated: false, toKeep: null };
   }
   const [older] = await db
     .select()
@@ -56,11 +58,19 @@ export async function findSheet(db: Db, actor: Actor, body: WalkBody): Promise<W
   if (older) {
     const known = older.body as Sheet;
     const judgedBy = older.madeHere ? known : withoutLeave(known);
-    return { ...older, sheet: judgedBy, toKeep: null };
+    const outdated = older.setupVersion !== setupVersion;
+    return { ...older, sheet: judgedBy, outdated, toKeep: null };
   }
   const sent = sheetSchema.safeParse(body.sheet);
   const toKeep = sent.success ? sent.data : sheet;
-  return { id: uuidv7(), setupVersion: 0, sheet: withoutLeave(toKeep), madeHere: false, toKeep };
+  return {
+    id: uuidv7(),
+    setupVersion: 0,
+    sheet: withoutLeave(toKeep),
+    madeHere: false,
+    outdated: false,
+    toKeep,
+  };
 }
 
 /** A sheet nobody here made is kept beside the first walk on it. None of its walks clears anything. */

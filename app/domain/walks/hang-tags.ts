@@ -10,8 +10,40 @@ import type { GateChange } from "../gate/change-truck";
 import { readOpenTags, type TruckKey } from "../gate/read-facts";
 import type { WalkBody } from "./walk-schema";
 
+/** An open tag by what it says, with its id. */
+export type HangingTag = OpenTag & { id: string };
+
+/**
+ * Tags the phone sent for what hangs already, by the id they came with: the open tag keeps the
+ * finding, and a photo of it belongs to that one. A colour raised is a new finding.
+ */
+export function absorbedTags(
+  body: WalkBody,
+  judged: Judgement,
+  openTags: readonly HangingTag[],
+): Map<string, string> {
+  const same = (a: { checkKey: string; problemKey: string }, b: typeof a) =>
+    a.checkKey === b.checkKey && a.problemKey === b.problemKey;
+  return new Map(
+    body.tags
+      .filter((sent) => !judged.tags.some((proposal) => same(proposal, sent)))
+      .flatMap((sent): [string, string][] => {
+        const open = openTags.find(
+          (tag) => same(tag, sent) && colourRank(tag.colour) >= colourRank(sent.colour),
+        );
+        // The id of the open tag itself belongs to another record, which refuses it (K4).
+        return open && open.id !== sent.id ? [[sent.id, open.id]] : [];
+      }),
+  );
+}
+
 /** Tag rows of a walk: one per problem answer, and any the driver hung beside. The driver's colour may only raise. */
-function tagRows(body: WalkBody, judged: Judgement, byKey: Map<string, Check>) {
+function tagRows(
+  body: WalkBody,
+  judged: Judgement,
+  byKey: Map<string, Check>,
+  absorbed: ReadonlyMap<string, string>,
+) {
   const proposed = judged.tags.map((proposal) => {
     const sent = body.tags.find(
       (tag) => tag.checkKey === proposal.checkKey && tag.problemKey === proposal.problemKey,
@@ -29,7 +61,7 @@ function tagRows(body: WalkBody, judged: Judgement, byKey: Map<string, Check>) {
   });
   const used = new Set(proposed.map((tag) => tag.id));
   const beside = body.tags
-    .filter((tag) => !used.has(tag.id))
+    .filter((tag) => !used.has(tag.id) && !absorbed.has(tag.id))
     .map((tag) => {
       const check = byKey.get(tag.checkKey);
       const problem = check?.problems.find((known) => known.key === tag.problemKey);
@@ -52,10 +84,10 @@ function tagRows(body: WalkBody, judged: Judgement, byKey: Map<string, Check>) {
 }
 
 /** Open tags as a new finding is compared with them. */
-export async function comparableTags(tx: Db, key: TruckKey): Promise<OpenTag[]> {
+export async function comparableTags(tx: Db, key: TruckKey): Promise<HangingTag[]> {
   const open = await readOpenTags(tx, key, { zone: "UTC", shopOpensMinute: 0 });
-  return open.flatMap(({ checkKey, problemKey, colour, limit }) =>
-    checkKey && problemKey ? [{ checkKey, problemKey, colour, limit }] : [],
+  return open.flatMap(({ id, checkKey, problemKey, colour, limit }) =>
+    checkKey && problemKey ? [{ id, checkKey, problemKey, colour, limit }] : [],
   );
 }
 
@@ -67,9 +99,10 @@ export async function hangTags(
   sheet: Sheet,
   judged: Judgement,
   raisedAt: Date,
+  absorbed: ReadonlyMap<string, string>,
 ) {
   const byKey = new Map(allChecks(sheet).map((check) => [check.key, check]));
-  const hung = tagRows(body, judged, byKey);
+  const hung = tagRows(body, judged, byKey, absorbed);
   if (hung.length === 0) return hung;
   await change.tx.insert(tags).values(
     hung.map((tag) => ({

@@ -4,7 +4,7 @@ import { photos } from "../../db/schema/tags";
 import { walks } from "../../db/schema/walks";
 import { type Clock, systemClock } from "../../services/clock";
 import { dueChecks } from "../../trade/sheet/due-checks";
-import { type Judgement, judgeAnswers } from "../../trade/sheet/judge-answers";
+import { type AnswerFault, type Judgement, judgeAnswers } from "../../trade/sheet/judge-answers";
 import type { StandingWord } from "../../trade/standing/standing";
 import { writeAcknowledgement } from "../acknowledgements/acknowledge";
 import type { Actor } from "../actor";
@@ -12,12 +12,12 @@ import { changeTruck, type GateChange } from "../gate/change-truck";
 import { once, sha256Hex } from "../receipts/once";
 import { ok, type Result, refuse } from "../refusals";
 import { weeklyDone, weeklyDueOn, writeWeeklyRound } from "../rounds/weekly-round";
+import { queueRedTags } from "../tags/red-tag-mail";
 import { yardOfTruck } from "../tags/yard-of-truck";
 import { yardDay } from "../yard-day";
 import { type ClearsNot, countsFrom, type SendAge } from "./counts-from";
 import { findSheet, keepUnknownSheet, type WalkSheet } from "./find-sheet";
-import { comparableTags, hangTags, writeSeenTags } from "./hang-tags";
-import { queueRedTags } from "./red-tag-mail";
+import { absorbedTags, comparableTags, hangTags, writeSeenTags } from "./hang-tags";
 import type { WalkBody } from "./walk-schema";
 import { pumpHoursOf, writeAnswers } from "./write-answers";
 
@@ -28,6 +28,8 @@ export interface WalkReceipt {
   standing: StandingWord;
   clearsNot: ClearsNot | null;
   missing: string[];
+  /** Answers that cannot stand, and why: each counts as missing. */
+  faults: AnswerFault[];
   tags: { id: string; checkKey: string; colour: string }[];
   photosMissing: string[];
 }
@@ -46,6 +48,8 @@ interface Read {
   age: ReturnType<typeof countsFrom>;
   day: string;
   judged: Judgement;
+  /** Sent tags that hang already, by the id they came with. */
+  absorbed: Map<string, string>;
   clearsNot: ClearsNot | null;
 }
 
@@ -68,9 +72,11 @@ async function readWalk(
   const context = { walkKind: body.kind, openTags };
   const judged = judgeAnswers(found.sheet, due, body.answers, context);
   let { clearsNot } = age;
+  if (found.outdated) clearsNot ??= "setup-changed";
   if (!found.madeHere) clearsNot = "sheet-unknown";
   else if (!judged.complete) clearsNot = "incomplete";
-  return { found, zone, elevationM, age, day, judged, clearsNot };
+  const absorbed = absorbedTags(body, judged, openTags);
+  return { found, zone, elevationM, age, day, judged, absorbed, clearsNot };
 }
 
 /** A walk it rests on or corrects is one of this truck's. */
@@ -127,12 +133,18 @@ async function writeWalk(
 }
 
 /** The photos a walk promises; each comes by itself, later. */
-async function promisePhotos(change: GateChange, actor: Actor, body: WalkBody): Promise<void> {
+async function promisePhotos(
+  change: GateChange,
+  actor: Actor,
+  body: WalkBody,
+  absorbed: ReadonlyMap<string, string>,
+): Promise<void> {
   if (body.photos.length === 0) return;
   const { carrierId, personId } = actor;
   await change.tx.insert(photos).values(
     body.photos.map((photo) => ({
       ...photo,
+      tagId: photo.tagId === null ? null : (absorbed.get(photo.tagId) ?? photo.tagId),
       carrierId,
       truckId: body.truckId,
       walkId: body.id,
@@ -166,15 +178,25 @@ export async function recordWalk(
       key,
       async (change) => {
         const read = await readWalk(change, actor, sent, found);
-        const { judged, age, clearsNot } = read;
+        const { judged, absorbed, age, clearsNot } = read;
         await refuseUnknownWalks(change, actor, body);
         await keepUnknownSheet(change, key, found, body.sheetHash);
         await writeWalk(change, actor, body, hash, read);
         await writeAnswers(change, actor, body, judged, age.countsFrom, read.elevationM);
-        const hung = await hangTags(change, actor, body, found.sheet, judged, age.countsFrom);
+        const hung = await hangTags(
+          change,
+          actor,
+          body,
+          found.sheet,
+          judged,
+          age.countsFrom,
+          absorbed,
+        );
         await writeSeenTags(change, actor, body);
-        await promisePhotos(change, actor, body);
-        if (body.kind === "before" && weeklyDone(found.sheet, body.answers, judged)) {
+        await promisePhotos(change, actor, body, absorbed);
+        const believed = clearsNot === null || clearsNot === "incomplete";
+        const weekly = believed && weeklyDone(found.sheet, body.answers, judged);
+        if (body.kind === "before" && weekly) {
           const pumpHours = pumpHoursOf(judged);
           const at = age.countsFrom;
           const done = { walkId: body.id, by: personId, at, day: read.day, pumpHours };
@@ -194,6 +216,7 @@ export async function recordWalk(
           standing,
           clearsNot,
           missing: judged.missing,
+          faults: judged.faults,
           tags: hung.map(({ id, checkKey, colour }) => ({ id, checkKey, colour })),
           photosMissing: body.photos.map((photo) => photo.id),
         });

@@ -114,6 +114,8 @@ export const walkText = {
     `${count} ${count === 1 ? "check has" : "checks have"} no answer that stands: this walk clears nothing.`,
   clearsNot: {
     incomplete: "",
+    "setup-changed":
+      "The truck's fittings or set points have changed since: walk it again on its new sheet.",
     "age-unknown": "The phone did not say when it was signed: this walk clears nothing.",
     "age-negative": "The phone's clock went backwards: this walk clears nothing.",
     "age-over-24h": "It is more than a day old: this walk clears nothing.",
