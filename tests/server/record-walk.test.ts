@@ -17,6 +17,7 @@ import { type SignOffInput, signOff } from "~/domain/tags/sign-off";
 import { addFitting, addFittingSchema } from "~/domain/trucks/add-fitting";
 import { setSetPoint, setSetPointSchema } from "~/domain/trucks/set-set-point";
 import { storage } from "~/services/storage";
+import { canonicalSheet } from "~/trade/sheet/canonical-sheet";
 import { allChecks } from "~/trade/sheet/due-checks";
 import { testDatabase, testDb } from "./database";
 import { makeCarrier, makePerson, type TestCarrier, TestClock, truckRow } from "./factories";
@@ -522,11 +523,17 @@ test("a tag hung beside is never lower than its problem, and knows the part at f
   ]);
 });
 
-test("an unknown sheet is stored with the walk, never refused: tags hold, nothing clears", async () => {
-  const db = testDb();
-  const sheetHash = sha256("a sheet of last month");
+/** A sheet this server never made, under its own hash. */
+function foreignSheet(change: (sheet: TruckToWalk["sheet"]) => void = () => undefined) {
   const sheet = structuredClone(truck.sheet);
   sheet.stations[0]!.label = "Approach, as it was";
+  change(sheet);
+  return { sheet, sheetHash: sha256(canonicalSheet(sheet)) };
+}
+
+test("an unknown sheet is stored with the walk, never refused: tags hold, nothing clears", async () => {
+  const db = testDb();
+  const { sheet, sheetHash } = foreignSheet();
   const found = tagged(truck, "rear.lamps", "brake-or-turn");
   const body = walkBody(truck, { sheetHash, sheet, ...found });
   const receipt = accepted(await send(body));
@@ -540,8 +547,7 @@ test("an unknown sheet is stored with the walk, never refused: tags hold, nothin
 });
 
 test("a second walk on the same unknown sheet clears nothing either", async () => {
-  const sheetHash = sha256("a sheet of last month");
-  const { sheet } = truck;
+  const { sheet, sheetHash } = foreignSheet();
   accepted(await send(walkBody(truck, { sheetHash, sheet })));
   const second = accepted(await send(walkBody(truck, { sheetHash, sheet })));
   expect(second).toMatchObject({ clearsNot: "sheet-unknown", standing: "walk-due" });
@@ -550,12 +556,12 @@ test("a second walk on the same unknown sheet clears nothing either", async () =
 test("K10: an unknown sheet opens no driver-fix and no sign-off from photos, the first time or the second", async () => {
   const db = testDb();
   await changePolicy(db, manager, { ...DEFAULT_POLICY, driverFix: true }, clock);
-  const sheet = structuredClone(truck.sheet);
-  for (const check of sheet.stations.flatMap((station) => station.checks)) {
-    Object.assign(check, { roadSafety: false, part: null });
-    for (const problem of check.problems) Object.assign(problem, { driverFix: true, remote: true });
-  }
-  const sheetHash = sha256("a sheet of one's own");
+  const { sheet, sheetHash } = foreignSheet((own) => {
+    for (const check of own.stations.flatMap((station) => station.checks)) {
+      Object.assign(check, { roadSafety: false, part: null });
+      for (const one of check.problems) Object.assign(one, { driverFix: true, remote: true });
+    }
+  });
   for (const problemKey of ["weak", "pulls"]) {
     const body = walkBody(truck, {
       sheetHash,
@@ -571,8 +577,7 @@ test("K10: an unknown sheet opens no driver-fix and no sign-off from photos, the
 });
 
 test("many first walks at once on one unknown sheet are all stored", async () => {
-  const sheetHash = sha256("a sheet of last month");
-  const { sheet } = truck;
+  const { sheet, sheetHash } = foreignSheet();
   const bodies = Array.from({ length: 6 }, () => walkBody(truck, { sheetHash, sheet }));
   const results = await Promise.all(bodies.map((body) => send(body)));
   expect(results.map(codeOf)).toEqual(bodies.map(() => "ok"));
@@ -591,6 +596,13 @@ test("an unknown sheet that is no sheet at all, or none, is no reason to refuse 
     expect(receipt.clearsNot, String(sheet)).toBe("sheet-unknown");
   }
   expect(await mayClear(driver)).toBe(false);
+});
+
+test("a sheet that is not what its hash says is kept by nobody, and the walk is judged by today's", async () => {
+  const { sheet } = foreignSheet();
+  const body = walkBody(truck, { sheet, sheetHash: sha256("another sheet") });
+  expect(accepted(await send(body)).clearsNot).toBe("sheet-unknown");
+  expect((await storedWalk(testDb(), truck, body.id))?.sheetId).toBe(truck.sheetId);
 });
 
 test("a walk on another truck's sheet is a walk on an unknown sheet", async () => {

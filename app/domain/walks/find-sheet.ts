@@ -2,11 +2,13 @@ import { and, desc, eq } from "drizzle-orm";
 import { v7 as uuidv7 } from "uuid";
 import type { Db } from "../../db/client";
 import { sheetVersions } from "../../db/schema/trucks";
+import { canonicalSheet } from "../../trade/sheet/canonical-sheet";
 import type { Sheet } from "../../trade/sheet/check";
 import { sheetSchema } from "../../trade/sheet/sheet-schema";
 import type { Actor } from "../actor";
 import type { GateChange } from "../gate/change-truck";
 import type { TruckKey } from "../gate/read-facts";
+import { sha256Hex } from "../receipts/once";
 import { sheetForTruck } from "../sheets/sheet-for-truck";
 import type { WalkBody } from "./walk-schema";
 
@@ -62,15 +64,12 @@ export async function findSheet(db: Db, actor: Actor, body: WalkBody): Promise<W
     return { ...older, sheet: judgedBy, outdated, toKeep: null };
   }
   const sent = sheetSchema.safeParse(body.sheet);
-  const toKeep = sent.success ? sent.data : sheet;
-  return {
-    id: uuidv7(),
-    setupVersion: 0,
-    sheet: withoutLeave(toKeep),
-    madeHere: false,
-    outdated: false,
-    toKeep,
-  };
+  const unknown = { setupVersion: 0, madeHere: false, outdated: false };
+  // No sheet, or another one than its hash says: the walk is judged by today's, and clears nothing.
+  if (!sent.success || sha256Hex(canonicalSheet(body.sheet as Sheet)) !== body.sheetHash) {
+    return { ...unknown, id: sheetId, sheet: withoutLeave(sheet), toKeep: null };
+  }
+  return { ...unknown, id: uuidv7(), sheet: withoutLeave(sent.data), toKeep: sent.data };
 }
 
 /** A sheet nobody here made is kept beside the first walk on it. None of its walks clears anything. */
