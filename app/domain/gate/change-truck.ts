@@ -1,4 +1,4 @@
-import { and, eq, inArray, sql } from "drizzle-orm";
+import { and, eq, sql } from "drizzle-orm";
 import type { Db } from "../../db/client";
 import { mayRetry } from "../../db/errors";
 import { inTransaction } from "../../db/retry";
@@ -84,11 +84,13 @@ async function writeClearances(tx: Db, key: TruckKey, after: Standing, tagsSeq: 
   }));
   const ofTruck = and(eq(clearances.carrierId, key.carrierId), eq(clearances.truckId, key.truckId));
   const kept = rows.map((row) => row.driverId);
-  await tx
-    .delete(clearances)
-    .where(
-      kept.length === 0 ? ofTruck : and(ofTruck, sql`not ${inArray(clearances.driverId, kept)}`),
-    );
+  // Rows are named one by one: a DELETE over the truck's range would lock the gap that the next
+  // truck's first row goes into, and two trucks walked at once would deadlock.
+  const before = await tx.select({ driverId: clearances.driverId }).from(clearances).where(ofTruck);
+  for (const { driverId } of before) {
+    if (kept.includes(driverId)) continue;
+    await tx.delete(clearances).where(and(ofTruck, eq(clearances.driverId, driverId)));
+  }
   if (rows.length === 0) return;
   await tx
     .insert(clearances)
