@@ -2,7 +2,8 @@ import { v7 as uuidv7 } from "uuid";
 import { expect, test } from "vitest";
 import { readFacts } from "~/domain/gate/read-facts";
 import { DEFAULT_POLICY } from "~/domain/policy/settings";
-import { recordRound } from "~/domain/rounds/record-round";
+import { recordRound, recordRoundSchema } from "~/domain/rounds/record-round";
+import { ROUND_KINDS } from "~/trade/rounds";
 import { testDb } from "./database";
 import { makeCarrier, makePerson, makeTruck, TestClock } from "./factories";
 
@@ -39,4 +40,12 @@ test("K1: the last round of a truck is its own, whatever day another truck had o
   expect(await dueOf(early)).toEqual(["2026-06-19", "2026-07-12"]);
   expect(await dueOf(late)).toEqual(["2026-06-22", "2026-07-15"]);
   expect(await dueOf(elsewhere)).toEqual(["2026-06-24", "2026-07-17"]);
+});
+
+test("every round there is can be recorded at the bench, the shop's weekly part too", () => {
+  const round = { id: uuidv7(), truckId: uuidv7(), doneOn: "2026-06-12", pumpHours: null };
+  for (const kind of ROUND_KINDS) {
+    expect(recordRoundSchema.safeParse({ ...round, kind }).success, kind).toBe(true);
+  }
+  expect(recordRoundSchema.safeParse({ ...round, kind: "yearly" }).success).toBe(false);
 });

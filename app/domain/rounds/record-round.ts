@@ -4,6 +4,7 @@ import type { Db } from "../../db/client";
 import { rounds } from "../../db/schema/trucks";
 import { readings } from "../../db/schema/walks";
 import { type Clock, systemClock } from "../../services/clock";
+import { ROUND_KINDS } from "../../trade/rounds";
 import type { StandingWord } from "../../trade/standing/standing";
 import type { Actor } from "../actor";
 import { changeTruck } from "../gate/change-truck";
@@ -16,7 +17,7 @@ import { addDays, yardDay, yardInstant } from "../yard-day";
 export const recordRoundSchema = z.object({
   id: z.uuid(),
   truckId: z.uuid(),
-  kind: z.enum(["weekly", "monthly"]),
+  kind: z.enum(ROUND_KINDS),
   doneOn: z.iso.date(),
   pumpHours: z.number().min(0).max(200_000).nullable(),
 });
