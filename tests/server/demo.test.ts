@@ -188,8 +188,10 @@ test("this morning's pegboard has every word on it, and mostly cleared trucks", 
   expect(names("held")).toEqual(["T-207", "T-109", "T-125"]);
   expect(names("walk-due")).toEqual(["T-219", "T-120"]);
   expect(names("limited")).toEqual(["T-211", "T-131"]);
-  expect(names("out")).toEqual(["T-203"]);
+  expect(names("out")).toEqual(["T-121"]);
   expect(names("cleared")).toHaveLength(8);
+  const warned = new Set(pegs.flatMap((peg) => peg.detail.warnings));
+  expect([...warned].sort()).toEqual(["extinguisher", "permit"]);
   const shown = await testDb().select().from(photos);
   expect(shown.length).toBeGreaterThanOrEqual(12);
   expect(shown.filter((photo) => photo.storedAt === null)).toEqual([]);
