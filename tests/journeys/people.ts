@@ -36,10 +36,10 @@ export async function signIn(browser: Browser, email: string): Promise<Page> {
   const before = (await (await fetch(`${MAIL_PAGE}email`)).json()) as Received[];
   await page.goto("/sign-in");
   await page.getByRole("textbox", { name: /e-mail/i }).fill(email);
-  await page.locator("main").getByRole("button").first().click();
+  await page.locator('main button[type="submit"]').first().click();
   const code = await codeFor(email, new Set(before.map((mail) => mail.id)));
   await page.getByRole("textbox", { name: /code/i }).fill(code);
-  await page.locator("main").getByRole("button").first().click();
+  await page.locator('main button[type="submit"]').first().click();
   await expect(page).not.toHaveURL(/sign-in/);
   return page;
 }

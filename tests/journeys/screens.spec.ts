@@ -36,16 +36,16 @@ test("the door: sign-in, its code, a wrong code, an ended invitation, safety, no
     ["not-found", "/no-such-page"],
   ]);
   await page.goto("/sign-in");
-  await page.locator("main").getByRole("button").first().click();
+  await page.locator('main button[type="submit"]').first().click();
   await expect(page.getByRole("textbox", { name: /e-mail/i })).toHaveAttribute(
     "aria-invalid",
     "true",
   );
   await expectAccessible(page, "sign-in-empty");
   await page.getByRole("textbox", { name: /e-mail/i }).fill("nobody@nowhere.example");
-  await page.locator("main").getByRole("button").first().click();
+  await page.locator('main button[type="submit"]').first().click();
   await page.getByRole("textbox", { name: /code/i }).fill("000000");
-  await page.locator("main").getByRole("button").first().click();
+  await page.locator('main button[type="submit"]').first().click();
   await expect(page.getByRole("textbox", { name: /code/i })).toHaveAttribute(
     "aria-invalid",
     "true",
