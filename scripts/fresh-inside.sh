@@ -38,6 +38,13 @@ others() {
   done
 }
 
+pid_of() {
+  local pid
+  for pid in /proc/[0-9]*; do
+    tr '\0' ' ' <"$pid/cmdline" 2>/dev/null | grep -q "^$1" && echo "${pid#/proc/}" && return
+  done
+}
+
 nothing_left() {
   local left
   left=$(others | grep -E 'mariadbd|node |chromium|stand-ins|npm ' || true)
@@ -58,17 +65,17 @@ port_of() {
 
 starts() {
   local log=$1
-  (as npm start) >"$log" 2>&1 &
+  (as setsid npm start) >"$log" 2>&1 &
   npm=$!
   port=$(port_of "$log" "$npm") || { cat "$log"; fail "npm start did not start"; }
   node -e 'fetch(process.argv[1]).then((r) => process.exit(r.ok ? 0 : 1), () => process.exit(1))' \
     "http://127.0.0.1:$port/healthz" || fail "/healthz does not answer"
 }
 
-# Sends a signal to a process and waits for it.
+# Sends a signal to a process, or to the group of a negative number, and waits for it.
 ends() {
-  kill "-$1" "$2" 2>/dev/null
-  wait "$2" 2>/dev/null
+  kill "-$1" -- "$2" 2>/dev/null
+  wait "${2#-}" 2>/dev/null
   sleep 1
 }
 
@@ -97,17 +104,24 @@ passed "SIGTERM leaves nothing"
 SECONDS=0
 starts /tmp/again.log
 passed "npm start again, $SECONDS s"
-# What Ctrl-C does: the signal goes to the whole group of the foreground.
-node=$npm
-pkill_group() { kill -INT "$1"; }
-pkill_group "$node"
-wait "$npm" 2>/dev/null
-sleep 1
-nothing_left "SIGINT"
+# What Ctrl-C does: the signal goes to the whole group in the foreground.
+ends INT "-$npm"
+nothing_left "Ctrl-C"
 passed "Ctrl-C leaves nothing"
 
-starts /tmp/kill.log
+starts /tmp/parent.log
 ends KILL "$npm"
+for _ in $(seq 1 20); do
+  [ "$(others | grep -c -E 'mariadbd|stand-ins|server.mjs')" -eq 0 ] && break
+  sleep 1
+done
+nothing_left "npm was killed over npm start"
+passed "a lost parent ends it all"
+
+starts /tmp/kill.log
+kill -KILL "$(pid_of 'node scripts/start.mjs')" "$npm"
+wait "$npm" 2>/dev/null
+sleep 2
 left=$(others | grep -c -E 'mariadbd|stand-ins|server.mjs' || true)
 [ "$left" -gt 0 ] || fail "SIGKILL was to leave children, so that the next run has something to clear"
 starts /tmp/after-kill.log
