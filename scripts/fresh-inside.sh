@@ -27,14 +27,12 @@ fail() {
   exit 1
 }
 
-# Everything but this shell, by process number and name. A zombie of the first process's own is none.
+# What runs beside this shell, a line each. A zombie has no command line and is none.
 others() {
-  local pid
+  local pid line
   for pid in /proc/[0-9]*; do
-    pid=${pid#/proc/}
-    [ "$pid" = $$ ] || [ "$pid" = "$BASHPID" ] && continue
-    [ -s "/proc/$pid/cmdline" ] || continue
-    tr '\0' ' ' <"/proc/$pid/cmdline" 2>/dev/null | cut -c1-120 | grep -v '^ *$' || true
+    line=$(tr '\0' ' ' 2>/dev/null <"$pid/cmdline" | cut -c1-160)
+    [ -n "$line" ] && echo "$line"
   done
 }
 
@@ -47,7 +45,7 @@ pid_of() {
 
 nothing_left() {
   local left
-  left=$(others | grep -E 'mariadbd|node |chromium|stand-ins|npm ' || true)
+  left=$(others | grep -E '(mariadbd|node|chromium|npm) ' || true)
   [ -z "$left" ] || fail "left running after $1: $left"
 }
 
@@ -78,6 +76,12 @@ ends() {
   wait "${2#-}" 2>/dev/null
   sleep 1
 }
+
+# The check itself must be able to fail.
+sleep 60 &
+sleeper=$!
+others | grep -q '^sleep 60' || fail "running processes are not seen"
+kill "$sleeper"
 
 checks=0
 passed() {
