@@ -80,7 +80,8 @@ ends() {
 # The check itself must be able to fail.
 sleep 60 &
 sleeper=$!
-others | grep -q '^sleep 60' || fail "running processes are not seen"
+seen=$(others)
+grep -q '^sleep 60' <<<"$seen" || fail "running processes are not seen"
 kill "$sleeper"
 
 checks=0

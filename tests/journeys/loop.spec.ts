@@ -1,62 +1,11 @@
-import { expect, type Page, test } from "@playwright/test";
+import { expect, test } from "@playwright/test";
 import sharp from "sharp";
 import { expectAccessible } from "./accessible";
 import { signIn } from "./people";
+import { fillWalk, handOver } from "./walking";
 
 const HOST = "tallowcreek.example";
 const UNIT = "T-104";
-
-/** Answers every check of the sheet as a driver would who finds nothing wrong. */
-async function fillWalk(page: Page, name: string) {
-  for (const station of await page.getByRole("group").all()) {
-    const good = station.getByRole("button", { name: "Seen, all good" });
-    if ((await good.count()) > 0) await good.click();
-  }
-  for (const drain of await page.locator("select[data-alone]").all()) {
-    await drain.selectOption({ label: "Cracked it: dry" });
-  }
-  for (const shut of await page.getByRole("checkbox", { name: /: shut again$/ }).all()) {
-    await shut.check();
-  }
-  const numbers: [RegExp, string][] = [
-    [/^air lost.*psi/i, "1"],
-    [/^tread/i, "9"],
-    [/^low-air warning/i, "65"],
-    [/^spring brake/i, "30"],
-    [/^pressure relief.*psi/i, "12"],
-    [/^load aboard/i, "0"],
-    [/hours.*, h$/i, "1300"],
-    [/odometer.*, mi$/i, "120500"],
-    [/speed.*, rpm$/i, "1050"],
-    [/, inHg$/i, "21"],
-  ];
-  for (const [label, value] of numbers) {
-    for (const box of await page.getByRole("textbox", { name: label }).all()) await box.fill(value);
-  }
-  for (const box of await page.getByRole("textbox", { name: /^(caps|sight)/i }).all()) {
-    const hint = (await box.getAttribute("aria-describedby")) ?? "";
-    const words = (await page.locator(`[id="${hint.split(" ").at(-1)}"]`).textContent()) ?? "";
-    await box.fill(words.match(/\d+/)?.[0] ?? "0");
-  }
-  for (const heard of await page.getByRole("group", { name: /heard it open/ }).all()) {
-    await heard.getByRole("radio", { name: "Yes" }).check();
-  }
-  await page.getByLabel(/name/i).last().fill(name);
-}
-
-async function handOver(page: Page, driver: string) {
-  await page.goto(`/board/${UNIT}`);
-  const form = page.getByRole("form", { name: "Hand over the key" });
-  await form.getByRole("combobox", { name: "Driver" }).selectOption({ label: driver });
-  await form.getByRole("textbox", { name: "Run" }).fill("Run 31, grease traps");
-  for (const need of ["Off-load by pressure", "Towing", "Hazmat"]) {
-    await form.getByRole("group", { name: need }).getByRole("radio", { name: "No" }).check();
-  }
-  await form.getByRole("textbox", { name: /vacuum/i }).fill("18");
-  await form.getByRole("textbox", { name: /load/i }).fill("2000");
-  await form.getByRole("textbox", { name: /hose/i }).fill("100");
-  await form.getByRole("button", { name: "Hand over the key" }).click();
-}
 
 test("the loop: tagged, refused, signed off, refused, acknowledged, handed over, and not to a stranger", async ({
   browser,
@@ -92,7 +41,7 @@ test("the loop: tagged, refused, signed off, refused, acknowledged, handed over,
   });
 
   await test.step("dispatcher B is refused, with reasons", async () => {
-    await handOver(dispatcher, "Lena Marsh");
+    await handOver(dispatcher, UNIT, "Lena Marsh");
     await expect(dispatcher.getByRole("alert")).toContainText("The key stays on the peg");
     await expect(dispatcher.getByRole("alert")).toContainText("Red tag: Steering parts");
     await expectAccessible(dispatcher, "board-not-clear");
@@ -133,7 +82,7 @@ test("the loop: tagged, refused, signed off, refused, acknowledged, handed over,
   });
 
   await test.step("B is refused again: not acknowledged", async () => {
-    await handOver(dispatcher, "Lena Marsh");
+    await handOver(dispatcher, UNIT, "Lena Marsh");
     await expect(dispatcher.getByRole("alert")).toContainText("has not acknowledged one thing");
   });
 
@@ -145,12 +94,12 @@ test("the loop: tagged, refused, signed off, refused, acknowledged, handed over,
   });
 
   await test.step("B is refused for driver D, who has neither walked nor taken over", async () => {
-    await handOver(dispatcher, "Petra Solberg");
+    await handOver(dispatcher, UNIT, "Petra Solberg");
     await expect(dispatcher.getByRole("alert")).toContainText("has no walk on this truck");
   });
 
   await test.step("B hands A the key, and takes it back", async () => {
-    await handOver(dispatcher, "Lena Marsh");
+    await handOver(dispatcher, UNIT, "Lena Marsh");
     await expect(dispatcher.getByText("The key is handed over.")).toBeVisible();
     await expect(dispatcher.getByRole("heading", { name: UNIT })).toBeVisible();
     await dispatcher.getByRole("radio", { name: "Empty" }).check();
