@@ -130,8 +130,8 @@ sleep 2
 left=$(others | grep -c -E 'mariadbd|stand-ins|server.mjs' || true)
 [ "$left" -gt 0 ] || fail "SIGKILL was to leave children, so that the next run has something to clear"
 starts /tmp/after-kill.log
-count=$(others | grep -c 'mariadbd ' || true)
-[ "$count" -eq 1 ] || fail "$count databases run after the run that follows a SIGKILL"
+databases=$(others | grep 'mariadbd ' || true)
+[ "$(wc -l <<<"$databases")" -eq 1 ] || fail "not one database after the run that follows a SIGKILL: $databases"
 ends TERM "$npm"
 nothing_left "SIGKILL and the next run"
 passed "the run after a SIGKILL clears what it left"

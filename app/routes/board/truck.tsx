@@ -110,7 +110,7 @@ export default function Truck({ loaderData, actionData }: Route.ComponentProps) 
           )}
           {actionData?.fault && (
             <Notice tone="stop" title={back ? undefined : loop.board.refusedTitle} announce="now">
-              <p>{actionData.fault}</p>
+              {actionData.reasons.length === 0 && <p>{actionData.fault}</p>}
               <Reasons told={actionData.reasons.map(reasonText)} />
             </Notice>
           )}
