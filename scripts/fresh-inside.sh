@@ -36,6 +36,13 @@ others() {
   done
 }
 
+# Of these, what the two commands start. The list is read first, so that no search finds itself.
+ours() {
+  local list
+  list=$(others)
+  grep -E '^([^ ]*/)?(mariadbd|node|chromium|npm)( |$)' <<<"$list"
+}
+
 pid_of() {
   local pid
   for pid in /proc/[0-9]*; do
@@ -45,7 +52,7 @@ pid_of() {
 
 nothing_left() {
   local left
-  left=$(others | grep -E '(mariadbd|node|chromium|npm) ' || true)
+  left=$(ours)
   [ -z "$left" ] || fail "left running after $1: $left"
 }
 
@@ -117,7 +124,7 @@ passed "Ctrl-C leaves nothing"
 starts /tmp/parent.log
 ends KILL "$npm"
 for _ in $(seq 1 20); do
-  [ "$(others | grep -c -E 'mariadbd|stand-ins|server.mjs')" -eq 0 ] && break
+  [ -z "$(ours)" ] && break
   sleep 1
 done
 nothing_left "npm was killed over npm start"
@@ -127,10 +134,9 @@ starts /tmp/kill.log
 kill -KILL "$(pid_of 'node scripts/start.mjs')" "$npm"
 wait "$npm" 2>/dev/null
 sleep 2
-left=$(others | grep -c -E 'mariadbd|stand-ins|server.mjs' || true)
-[ "$left" -gt 0 ] || fail "SIGKILL was to leave children, so that the next run has something to clear"
+[ -n "$(ours)" ] || fail "SIGKILL was to leave children, so that the next run has something to clear"
 starts /tmp/after-kill.log
-databases=$(others | grep 'mariadbd ' || true)
+databases=$(ours | grep '^/usr/sbin/mariadbd ')
 [ "$(wc -l <<<"$databases")" -eq 1 ] || fail "not one database after the run that follows a SIGKILL: $databases"
 ends TERM "$npm"
 nothing_left "SIGKILL and the next run"

@@ -14,7 +14,8 @@ export async function startServices(children, root, folder, options = {}) {
   const mariadb = await startMariadb(children, folder, await freePort(), options);
   const s3Port = await freePort();
   const smtpPort = await freePort(options.smtpPort ?? 0);
-  const mailPort = await freePort(options.mailPort ?? 0);
+  // Neither listens yet, so the second must not be offered the port of the first.
+  const mailPort = await freePort(options.mailPort ? Math.max(options.mailPort, smtpPort + 1) : 0);
   const standIns = [join(root, "scripts/stand-ins.mjs"), join(folder, "objects"), BUCKET];
   const ports = [s3Port, smtpPort, mailPort].map(String);
   children.start("stand-ins", process.execPath, [...standIns, ...ports], { cwd: root });

@@ -6,6 +6,7 @@ import { photos, runLimits, tagChanges, tags } from "../../db/schema/tags";
 import { trucks } from "../../db/schema/trucks";
 import { colourRank } from "../../trade/limits";
 import type { Actor } from "../actor";
+import { asItHangs } from "../tags/as-it-hangs";
 
 /** Open tags as they hang now, worst and oldest first, with their photos and any leave to run. */
 export async function readBench(db: Db, actor: Actor) {
@@ -36,16 +37,10 @@ export async function readBench(db: Db, actor: Actor) {
     .select({ id: photos.id, tagId: photos.tagId, storedAt: photos.storedAt })
     .from(photos)
     .where(and(eq(photos.carrierId, carrierId), inArray(photos.tagId, ids)));
-  const worse = await db
+  const changes = await db
     .select()
     .from(tagChanges)
-    .where(
-      and(
-        eq(tagChanges.carrierId, carrierId),
-        inArray(tagChanges.tagId, ids),
-        eq(tagChanges.seen, "worse"),
-      ),
-    )
+    .where(and(eq(tagChanges.carrierId, carrierId), inArray(tagChanges.tagId, ids)))
     .orderBy(tagChanges.changedAt, tagChanges.id);
   const leaves = await db
     .select()
@@ -54,13 +49,11 @@ export async function readBench(db: Db, actor: Actor) {
     .orderBy(runLimits.signedAt, runLimits.id);
   return open
     .map((tag) => {
-      const change = worse.filter((one) => one.tagId === tag.id).at(-1);
-      const newest = leaves.filter((one) => one.tagId === tag.id).at(-1);
-      const leave = newest && (!change || newest.signedAt > change.changedAt) ? newest : null;
+      const { worse, leave } = asItHangs(tag.id, changes, leaves);
       return {
         ...tag,
-        colour: change?.colour ?? tag.colour,
-        limit: change ? change.limit : tag.limit,
+        colour: worse?.colour ?? tag.colour,
+        limit: worse ? worse.limit : tag.limit,
         leave: leave && { untilDay: leave.untilDay, limit: leave.limit },
         photos: promised.filter((photo) => photo.tagId === tag.id),
       };

@@ -10,6 +10,7 @@ import { cannotDo } from "../../trade/sheet/cannot-do";
 import type { StandingFacts, TagFact } from "../../trade/standing/facts";
 import { hours } from "../durations";
 import type { PolicySettings } from "../policy/settings";
+import { asItHangs } from "../tags/as-it-hangs";
 import { testsFor } from "../trucks/dated-tests";
 import { readFittings } from "../trucks/read-setup";
 import { addDays, yardDay, yardInstant } from "../yard-day";
@@ -80,11 +81,7 @@ export async function readOpenTags(db: Db, key: TruckKey, yard: YardClock): Prom
     .where(and(eq(runLimits.carrierId, key.carrierId), inArray(runLimits.tagId, ids)))
     .orderBy(runLimits.signedAt, runLimits.id);
   return open.map((tag) => {
-    const worse = changesSeen.filter((c) => c.tagId === tag.id && c.seen === "worse").at(-1);
-    const newestLeave = leaves.filter((leave) => leave.tagId === tag.id).at(-1);
-    // A tag found worse after the leave was signed ends that leave.
-    const leave =
-      newestLeave && (!worse || newestLeave.signedAt > worse.changedAt) ? newestLeave : undefined;
+    const { worse, leave } = asItHangs(tag.id, changesSeen, leaves);
     const event = leave
       ? { id: leave.id, by: leave.signedBy }
       : worse
