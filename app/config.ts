@@ -5,8 +5,8 @@ const DEMO_SECRETS = new Set(["keypeg-demo-secret-known-to-everyone", "S3RVER"])
 
 const environment = z.object({
   KEYPEG_DATABASE_URL: z.url({ protocol: /^mysql$/ }),
-  KEYPEG_S3_ENDPOINT: z.url(),
-  KEYPEG_S3_PUBLIC_ENDPOINT: z.url().optional(),
+  KEYPEG_S3_ENDPOINT: z.url({ protocol: /^https?$/ }),
+  KEYPEG_S3_PUBLIC_ENDPOINT: z.url({ protocol: /^https?$/ }).optional(),
   KEYPEG_S3_REGION: z.string().min(1).default("us-east-1"),
   KEYPEG_S3_BUCKET: z.string().min(3),
   KEYPEG_S3_ACCESS_KEY_ID: z.string().min(1),
@@ -52,9 +52,12 @@ export function readConfig(env: Record<string, string | undefined>): Config {
   }
   const e = parsed.data;
   const demo = e.KEYPEG_DEMO === "1";
-  const known = [e.KEYPEG_SECRET, e.KEYPEG_S3_SECRET_ACCESS_KEY].some((s) => DEMO_SECRETS.has(s));
-  if (known && !demo && env.NODE_ENV === "production") {
-    throw new ConfigError("A demo secret is set outside the demo. Set secrets of your own.");
+  const known = (["KEYPEG_SECRET", "KEYPEG_S3_SECRET_ACCESS_KEY"] as const).filter((name) =>
+    DEMO_SECRETS.has(e[name]),
+  );
+  if (known.length > 0 && !demo && env.NODE_ENV === "production") {
+    const lines = known.map((name) => `${name} is the demo's, which everyone may read`);
+    throw new ConfigError(`Set secrets of your own outside the demo:\n  ${lines.join("\n  ")}`);
   }
   return {
     databaseUrl: e.KEYPEG_DATABASE_URL,
