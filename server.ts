@@ -1,3 +1,4 @@
+import { AsyncLocalStorage } from "node:async_hooks";
 import { randomUUID } from "node:crypto";
 import { readFileSync } from "node:fs";
 import { createServer, type IncomingMessage, type ServerResponse } from "node:http";
@@ -17,7 +18,12 @@ interface AppEntry {
 }
 
 const MEGABYTE = 1024 * 1024;
-const STOP_WITHIN_MS = 10_000;
+/** After a SIGTERM: how long requests may run on, and when the process is gone whatever runs. */
+const REQUESTS_WITHIN_MS = 8_000;
+const STOP_WITHIN_MS = 9_500;
+/** How long the body of a refused request is still taken off the wire, so that its sender can read why. */
+const LINGER_MS = 5_000;
+const METHODS = new Set(["GET", "HEAD", "POST", "PUT", "PATCH", "DELETE", "OPTIONS"]);
 const here = new URL(".", import.meta.url);
 const build: ServerBuild = await import(new URL("./server/index.js", here).href);
 const app = build.entry.module as unknown as AppEntry;
@@ -45,13 +51,16 @@ const files = sirv(new URL("client", here).pathname, {
   },
 });
 
-const routes = createRequestListener({
+/** The listener copies a request's raw headers, so the id travels beside it. */
+const currentId = new AsyncLocalStorage<string>();
+
+const listener = createRequestListener({
   build,
   mode: "production",
   getLoadContext: (request, client) =>
     app.loadContext({
       address: clientAddress(client.address, request.headers.get("x-forwarded-for")),
-      requestId: request.headers.get("x-request-id") ?? randomUUID(),
+      requestId: currentId.getStore() ?? "",
     }) as never,
 });
 
@@ -64,13 +73,34 @@ function clientAddress(socket: string, forwarded: string | null): string {
   return address;
 }
 
+/** A caller's own id, if it is plain enough to stand in a log. */
+function requestIdOf(request: IncomingMessage): string {
+  const given = request.headers["x-request-id"];
+  return typeof given === "string" && /^[\w.-]{8,64}$/.test(given) ? given : randomUUID();
+}
+
+/** Can the framework make an address of it? Its listener throws outside every catch if it cannot. */
+function isReadable(request: IncomingMessage): boolean {
+  return URL.canParse(request.url ?? "", `http://${request.headers.host ?? "localhost"}`);
+}
+
 function answer(response: ServerResponse, status: number, code: string, title: string): void {
   response.writeHead(status, {
     "Content-Type": "application/problem+json",
     "Cache-Control": "no-store",
-    Connection: "close",
+    "X-Content-Type-Options": "nosniff",
   });
   response.end(JSON.stringify({ type: `urn:keypeg:problem:${code}`, status, code, title }));
+}
+
+/**
+ * Ends a connection whose refused body does not end. Ending it at once would reset it, and a
+ * sender in the middle of its body would never see the answer.
+ */
+function linger(request: IncomingMessage): void {
+  const timer = setTimeout(() => request.socket.destroy(), LINGER_MS);
+  request.on("close", () => clearTimeout(timer));
+  request.resume();
 }
 
 /** Refuses a body before a byte of it is read: too long, or of a length not said. */
@@ -79,11 +109,13 @@ function bodyRefused(request: IncomingMessage, response: ServerResponse): boolea
   const said = request.headers["content-length"];
   if (said === undefined && request.headers["transfer-encoding"] !== undefined) {
     answer(response, 411, "length-required", "Say how long the body is.");
+    linger(request);
     return true;
   }
   const photo = request.method === "PUT" && request.url?.startsWith("/api/v1/photos/");
   if (Number(said ?? 0) <= (photo ? 12 : 1) * MEGABYTE) return false;
   answer(response, 413, "too-large", "This is too large to take.");
+  linger(request);
   return true;
 }
 
@@ -96,6 +128,12 @@ function keepingRepeated(response: ServerResponse): ServerResponse {
   response.writeHead = ((status: number, pairs: readonly string[] = []) => {
     for (let n = 0; n + 1 < pairs.length; n += 2) {
       response.appendHeader(pairs[n] ?? "", pairs[n + 1] ?? "");
+    }
+    // A page or its data may show what only this person may see.
+    if (!response.hasHeader("Cache-Control"))
+      response.setHeader("Cache-Control", "private, no-cache");
+    if (!response.hasHeader("X-Content-Type-Options")) {
+      response.setHeader("X-Content-Type-Options", "nosniff");
     }
     return writeHead(status);
   }) as typeof response.writeHead;
@@ -111,37 +149,63 @@ async function health(response: ServerResponse): Promise<void> {
   response.end(JSON.stringify(state));
 }
 
-const server = createServer((request, response) => {
+/** Hands a request to the framework. What it throws ends this request, never the process. */
+function routes(request: IncomingMessage, response: ServerResponse, requestId: string): void {
+  const run = async () => listener(request, keepingRepeated(response));
+  currentId.run(requestId, run).catch((error: unknown) => {
+    const name = error instanceof Error ? error.name : "unknown";
+    app.log.error({ requestId, error: name }, "request");
+    if (response.headersSent) response.destroy();
+    else answer(response, 500, "failed", "Something went wrong here.");
+  });
+}
+
+function serve(request: IncomingMessage, response: ServerResponse): void {
   const started = performance.now();
-  const requestId = randomUUID();
+  const requestId = requestIdOf(request);
   const path = (request.url ?? "/").split("?")[0] ?? "/";
-  request.headers["x-request-id"] = requestId;
   response.setHeader("X-Request-Id", requestId);
   response.on("close", () => {
     const ms = Math.round(performance.now() - started);
     const entry = { requestId, method: request.method, path: app.loggedPath(path) };
     app.log.info({ ...entry, status: response.statusCode, ms }, "request");
+    // A connection that was busy at the SIGTERM is idle only after this event.
+    if (stopping) setImmediate(() => server.closeIdleConnections());
   });
+  if (!METHODS.has(request.method ?? "")) {
+    answer(response, 405, "method", "This method is not known here.");
+    return;
+  }
+  if (!isReadable(request)) {
+    answer(response, 400, "bad-address", "This address cannot be read.");
+    return;
+  }
   if (bodyRefused(request, response)) return;
+  if (request.headers.expect) response.writeContinue();
   if (path === "/healthz") {
     health(response).catch(() => answer(response, 503, "unhealthy", "Not well."));
     return;
   }
   if (request.method === "GET" || request.method === "HEAD") {
-    files(request, response, () => routes(request, keepingRepeated(response)));
+    files(request, response, () => routes(request, response, requestId));
     return;
   }
-  routes(request, keepingRepeated(response));
-});
+  routes(request, response, requestId);
+}
+
+const server = createServer(serve);
+// Whoever asks first is refused before they send.
+server.on("checkContinue", serve);
 
 let stopping = false;
 /** Stops accepting, lets what runs end, then closes the database. */
 async function stop(): Promise<void> {
   if (stopping) return;
   stopping = true;
+  setTimeout(() => process.exit(1), STOP_WITHIN_MS).unref();
   const closed = new Promise<void>((resolve) => server.close(() => resolve()));
   server.closeIdleConnections();
-  const timer = setTimeout(() => server.closeAllConnections(), STOP_WITHIN_MS);
+  const timer = setTimeout(() => server.closeAllConnections(), REQUESTS_WITHIN_MS);
   await closed;
   clearTimeout(timer);
   await app.stop();

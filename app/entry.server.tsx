@@ -4,6 +4,7 @@ import { createReadableStreamFromReadable } from "@react-router/node";
 import { isbot } from "isbot";
 import { renderToPipeableStream } from "react-dom/server";
 import { type EntryContext, type RouterContextProvider, ServerRouter } from "react-router";
+import { clientOf } from "./context";
 import { contentPolicy } from "./http/content-policy";
 import { loggedPath } from "./http/logged-path";
 import { NonceContext } from "./ui/nonce";
@@ -48,7 +49,8 @@ export default function handleRequest(
         onShellError: reject,
         onError(error: unknown) {
           code = 500;
-          if (rendered) console.error(error);
+          // Before the shell the framework reports it; after, nobody else would.
+          if (rendered) console.error(JSON.stringify({ level: "error", error: wordless(error) }));
         },
       },
     );
@@ -57,10 +59,14 @@ export default function handleRequest(
 }
 
 /** Errors of loaders, actions and rendering, without the address's query or anything typed. */
-export function handleError(error: unknown, { request }: { request: Request }): void {
+export function handleError(
+  error: unknown,
+  { request, context }: { request: Request; context: Readonly<RouterContextProvider> },
+): void {
   if (request.signal.aborted) return;
   const path = loggedPath(new URL(request.url).pathname);
-  console.error(JSON.stringify({ level: "error", path, error: wordless(error) }));
+  const { requestId } = clientOf(context);
+  console.error(JSON.stringify({ level: "error", requestId, path, error: wordless(error) }));
 }
 
 function wordless(error: unknown): string {

@@ -23,20 +23,28 @@ export async function start(): Promise<void> {
   housekeeping = startHousekeeping(db, report("housekeeping"));
 }
 
+/** Shorter than whoever asks waits: what hangs is as good as away. */
+const HEALTH_WITHIN_MS = 3_000;
+
 async function works(check: () => Promise<unknown>): Promise<boolean> {
-  try {
-    await check();
-    return true;
-  } catch {
-    return false;
-  }
+  let timer: NodeJS.Timeout | undefined;
+  const late = new Promise<boolean>((resolve) => {
+    timer = setTimeout(() => resolve(false), HEALTH_WITHIN_MS);
+  });
+  const done = check().then(
+    () => true,
+    () => false,
+  );
+  const up = await Promise.race([done, late]);
+  clearTimeout(timer);
+  return up;
 }
 
 /** Are the database and the object store there? */
 export async function health(): Promise<{ ok: boolean; checks: Record<string, boolean> }> {
   const [databaseUp, storageUp] = await Promise.all([
-    works(() => database().db.execute(sql`select 1`)),
-    works(() => storage().check()),
+    works(async () => database().db.execute(sql`select 1`)),
+    works(async () => storage().check()),
   ]);
   return { ok: databaseUp && storageUp, checks: { database: databaseUp, storage: storageUp } };
 }
