@@ -46,7 +46,7 @@ export function Brief({ brief, ...form }: BriefProps) {
           colour={tag.colour}
           title={tagTitle(tag.title)}
           since={<Time at={new Date(tag.raisedAt)} zone={yard.zone} />}
-          limit={tag.limit ? limitText(tag.limit) : undefined}
+          limit={limitOf(tag)}
           heading="h3"
         />
       ))}
@@ -69,6 +69,12 @@ export function Brief({ brief, ...form }: BriefProps) {
       {brief.toAcknowledge.length > 0 && <SeenForm brief={brief} {...form} />}
     </section>
   );
+}
+
+/** What the tag forbids now: a certifier's leave to run has a limit of its own. */
+function limitOf(tag: BriefData["openTags"][number]): string | undefined {
+  const limit = tag.runUntil === null ? tag.limit : tag.runLimit;
+  return limit ? limitText(limit) : undefined;
 }
 
 function SeenForm({ brief, id, driver, typed, faults }: BriefProps) {
