@@ -79,8 +79,12 @@ function requestIdOf(request: IncomingMessage): string {
   return typeof given === "string" && /^[\w.-]{8,64}$/.test(given) ? given : randomUUID();
 }
 
-/** Can the framework make an address of it? Its listener throws outside every catch if it cannot. */
+/**
+ * Can the framework make an address of it? Its listener throws outside every catch if it cannot.
+ * Two slashes in front would be read as the name of another host.
+ */
 function isReadable(request: IncomingMessage): boolean {
+  if (request.url?.startsWith("//")) return false;
   return URL.canParse(request.url ?? "", `http://${request.headers.host ?? "localhost"}`);
 }
 
