@@ -5,6 +5,7 @@ import { may } from "~/auth/permissions";
 import { requirePermission } from "~/auth/require-permission";
 import { dbOf } from "~/context";
 import { readBoard } from "~/domain/board/read-board";
+import { truckByUnit } from "~/domain/brief/read-brief";
 import { handOver } from "~/domain/handovers/hand-over";
 import { takeBack } from "~/domain/handovers/take-back";
 import { REFUSAL_STATUS } from "~/domain/refusals";
@@ -37,8 +38,12 @@ export async function loader({ context, params }: Route.LoaderArgs) {
   };
 }
 
-export async function action({ context, request }: Route.ActionArgs) {
+export async function action({ context, params, request }: Route.ActionArgs) {
   const actor = requirePermission(context, "handover.make");
+  const db = dbOf(context);
+  if (!(await truckByUnit(db, actor.carrierId, params.unit))) {
+    throw data({ code: "not-found" }, { status: 404 });
+  }
   const form = await request.formData();
   const back = form.get("intent") === "take-back";
   const parsed = back ? takeBackInput(form) : handOverInput(form);
@@ -49,7 +54,6 @@ export async function action({ context, request }: Route.ActionArgs) {
     const faults = faultsOfIssues(parsed.error.issues, NEED_NAMES);
     return data({ ...empty, done, faults }, { status: 400 });
   }
-  const db = dbOf(context);
   const result = parsed.back
     ? await takeBack(db, actor, parsed.data)
     : await handOver(db, actor, parsed.data);
