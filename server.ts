@@ -8,7 +8,7 @@ import sirv from "sirv";
 
 /** What the built app hands to this server: one copy of each of its modules, one pool. */
 interface AppEntry {
-  start(): Promise<void>;
+  start(): Promise<{ host: string; port: number; trustedProxies: readonly string[] }>;
   health(): Promise<{ ok: boolean; checks: Record<string, boolean> }>;
   stop(): Promise<void>;
   loadContext(client: { address: string; requestId: string }): RouterContextProvider;
@@ -31,7 +31,12 @@ const scriptHashes: Record<string, string[]> = JSON.parse(
   readFileSync(new URL("script-hashes.json", here), "utf8"),
 );
 
-await app.start();
+const { host, port, trustedProxies } = await app.start().catch((error: unknown) => {
+  // What is wrong with the environment is told in lines of its own: a stack would bury them.
+  console.error(error instanceof Error && error.name === "ConfigError" ? error.message : error);
+  process.exit(1);
+});
+const trusted = new Set(trustedProxies);
 
 const files = sirv(new URL("client", here).pathname, {
   brotli: true,
@@ -45,11 +50,13 @@ const files = sirv(new URL("client", here).pathname, {
       immutable ? "public, max-age=31536000, immutable" : "no-cache",
     );
     const page = scriptHashes[path.replace(/\/$/, "") || "/"];
-    for (const [name, value] of Object.entries(app.pagePolicy(page ?? []))) {
-      response.setHeader(name, value);
-    }
+    setAll(response, app.pagePolicy(page ?? []));
   },
 });
+
+function setAll(response: ServerResponse, headers: Record<string, string>): void {
+  for (const [name, value] of Object.entries(headers)) response.setHeader(name, value);
+}
 
 /** The listener copies a request's raw headers, so the id travels beside it. */
 const currentId = new AsyncLocalStorage<string>();
@@ -66,7 +73,6 @@ const listener = createRequestListener({
 
 /** The nearest address that is not a proxy of ours; proxies are named in the environment. */
 function clientAddress(socket: string, forwarded: string | null): string {
-  const trusted = new Set((process.env.KEYPEG_TRUSTED_PROXIES ?? "").split(",").filter(Boolean));
   let address = socket;
   const hops = forwarded?.split(",").map((hop) => hop.trim()) ?? [];
   while (trusted.has(address) && hops.length > 0) address = hops.pop() ?? address;
@@ -92,7 +98,6 @@ function answer(response: ServerResponse, status: number, code: string, title: s
   response.writeHead(status, {
     "Content-Type": "application/problem+json",
     "Cache-Control": "no-store",
-    "X-Content-Type-Options": "nosniff",
   });
   response.end(JSON.stringify({ type: `urn:keypeg:problem:${code}`, status, code, title }));
 }
@@ -131,14 +136,13 @@ function keepingRepeated(response: ServerResponse): ServerResponse {
   const writeHead = response.writeHead.bind(response);
   response.writeHead = ((status: number, pairs: readonly string[] = []) => {
     for (let n = 0; n + 1 < pairs.length; n += 2) {
-      response.appendHeader(pairs[n] ?? "", pairs[n + 1] ?? "");
+      const [name = "", value = ""] = [pairs[n], pairs[n + 1]];
+      if (name.toLowerCase() === "set-cookie") response.appendHeader(name, value);
+      else response.setHeader(name, value);
     }
     // A page or its data may show what only this person may see.
     if (!response.hasHeader("Cache-Control"))
       response.setHeader("Cache-Control", "private, no-cache");
-    if (!response.hasHeader("X-Content-Type-Options")) {
-      response.setHeader("X-Content-Type-Options", "nosniff");
-    }
     return writeHead(status);
   }) as typeof response.writeHead;
   return response;
@@ -151,6 +155,12 @@ async function health(response: ServerResponse): Promise<void> {
     "Cache-Control": "no-store",
   });
   response.end(JSON.stringify(state));
+}
+
+/** An unknown file among the assets is not there: no page is made to say so. */
+function noSuchFile(response: ServerResponse): void {
+  response.writeHead(404, { "Content-Type": "text/plain", "Cache-Control": "no-store" });
+  response.end("Not found");
 }
 
 /** Hands a request to the framework. What it throws ends this request, never the process. */
@@ -169,6 +179,7 @@ function serve(request: IncomingMessage, response: ServerResponse): void {
   const requestId = requestIdOf(request);
   const path = (request.url ?? "/").split("?")[0] ?? "/";
   response.setHeader("X-Request-Id", requestId);
+  setAll(response, app.pagePolicy([]));
   response.on("close", () => {
     const ms = Math.round(performance.now() - started);
     const entry = { requestId, method: request.method, path: app.loggedPath(path) };
@@ -191,7 +202,10 @@ function serve(request: IncomingMessage, response: ServerResponse): void {
     return;
   }
   if (request.method === "GET" || request.method === "HEAD") {
-    files(request, response, () => routes(request, response, requestId));
+    files(request, response, () => {
+      if (path.startsWith("/assets/")) noSuchFile(response);
+      else routes(request, response, requestId);
+    });
     return;
   }
   routes(request, response, requestId);
@@ -218,7 +232,6 @@ async function stop(): Promise<void> {
 process.on("SIGTERM", stop);
 process.on("SIGINT", stop);
 
-const port = Number(process.env.PORT ?? 4180);
-server.listen(port, process.env.HOST ?? "127.0.0.1", () => {
+server.listen(port, host, () => {
   app.log.info({ port }, "listening");
 });

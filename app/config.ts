@@ -1,7 +1,18 @@
+import { isIP } from "node:net";
 import { z } from "zod";
 
 /** Secrets that stand in the project for everyone to read: good for the demo, for nothing else. */
 const DEMO_SECRETS = new Set(["keypeg-demo-secret-known-to-everyone", "S3RVER"]);
+
+/** Where http is as good as https: nothing leaves the machine. */
+const LOOPBACK = new Set(["127.0.0.1", "localhost", "[::1]"]);
+
+const port = "must be a port, a number up to 65535";
+const proxies = z
+  .string()
+  .transform((list) => list.split(",").map((one) => one.trim()))
+  .transform((list) => list.filter((one) => one !== ""))
+  .refine((list) => list.every((one) => isIP(one) > 0), "must be IP addresses with commas between");
 
 const environment = z.object({
   KEYPEG_DATABASE_URL: z.url({ protocol: /^mysql$/ }),
@@ -17,6 +28,9 @@ const environment = z.object({
   KEYPEG_PUBLIC_ORIGIN: z.url({ protocol: /^https?$/ }),
   KEYPEG_DEMO: z.enum(["0", "1"]).default("0"),
   KEYPEG_LOG_LEVEL: z.enum(["debug", "info", "warn", "error", "silent"]).default("info"),
+  KEYPEG_TRUSTED_PROXIES: proxies.default([]),
+  HOST: z.string().min(1).default("127.0.0.1"),
+  PORT: z.coerce.number(port).int(port).min(0, port).max(65_535, port).default(4180),
 });
 
 export interface Config {
@@ -35,10 +49,13 @@ export interface Config {
   publicOrigin: string;
   demo: boolean;
   logLevel: string;
+  listen: { host: string; port: number; trustedProxies: readonly string[] };
 }
 
 /** Thrown with one line for each value that is missing or wrong. */
-export class ConfigError extends Error {}
+export class ConfigError extends Error {
+  override name = "ConfigError";
+}
 
 /** Reads the environment. Every fault is named at once; demo secrets are refused in production. */
 export function readConfig(env: Record<string, string | undefined>): Config {
@@ -59,6 +76,12 @@ export function readConfig(env: Record<string, string | undefined>): Config {
     const lines = known.map((name) => `${name} is the demo's, which everyone may read`);
     throw new ConfigError(`Set secrets of your own outside the demo:\n  ${lines.join("\n  ")}`);
   }
+  const { protocol, hostname } = new URL(e.KEYPEG_PUBLIC_ORIGIN);
+  const open = protocol === "http:" && !LOOPBACK.has(hostname);
+  if (open && !demo && env.NODE_ENV === "production") {
+    // Without TLS whoever is on the way reads the session's cookie.
+    throw new ConfigError("KEYPEG_PUBLIC_ORIGIN must begin with https:// outside the demo");
+  }
   return {
     databaseUrl: e.KEYPEG_DATABASE_URL,
     s3: {
@@ -75,6 +98,7 @@ export function readConfig(env: Record<string, string | undefined>): Config {
     publicOrigin: new URL(e.KEYPEG_PUBLIC_ORIGIN).origin,
     demo,
     logLevel: e.KEYPEG_LOG_LEVEL,
+    listen: { host: e.HOST, port: e.PORT, trustedProxies: e.KEYPEG_TRUSTED_PROXIES },
   };
 }
 

@@ -1,7 +1,7 @@
 import { sql } from "drizzle-orm";
 import { RouterContextProvider } from "react-router";
 import { type Housekeeping, startHousekeeping } from "./auth/housekeeping";
-import { config } from "./config";
+import { type Config, config } from "./config";
 import { type Client, clientContext, closeDatabase, database } from "./context";
 import { startTicker, type Ticker } from "./domain/gate/ticker";
 import { log } from "./services/log";
@@ -12,15 +12,16 @@ let ticker: Ticker | null = null;
 let drain: MailDrain | null = null;
 let housekeeping: Housekeeping | null = null;
 
-/** Reads the configuration, opens the database and starts the background work. */
-export async function start(): Promise<void> {
-  config();
+/** Reads the configuration, opens the database and starts the background work; says where to listen. */
+export async function start(): Promise<Config["listen"]> {
+  const { listen } = config();
   const { db } = database();
   const report = (what: string) => (error: unknown) =>
     log().error({ what, error: error instanceof Error ? error.name : "unknown" }, "background");
   ticker = startTicker(db, report("ticker"));
   drain = startMailDrain(db, report("mail"));
   housekeeping = startHousekeeping(db, report("housekeeping"));
+  return listen;
 }
 
 /** Shorter than whoever asks waits: what hangs is as good as away. */

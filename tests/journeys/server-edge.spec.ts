@@ -275,3 +275,33 @@ test("the page made at build time names each of its inline scripts by hash", asy
     expect(answer.headers["referrer-policy"]).toBe("same-origin");
   }
 });
+
+test("an asset that is not there is said so without making a page", async () => {
+  const answer = await get("/assets/no-such-file.js");
+  expect([answer.status, answer.bytes.toString()]).toEqual([404, "Not found"]);
+  expect(answer.headers["content-type"]).toBe("text/plain");
+});
+
+for (const path of [
+  "/sign-in",
+  "/sign-in.data",
+  "/nowhere",
+  "/account",
+  "/api/v1/walks",
+  "/healthz",
+  "/safety",
+  "/assets/no-such-file.js",
+  "//",
+]) {
+  test(`what ${path} answers is kept in its place by its headers, each sent once`, async () => {
+    const { headers } = await get(path);
+    const policy = String(headers["content-security-policy"]);
+    for (const part of ["default-src 'self'", "frame-ancestors 'none'", "object-src 'none'"]) {
+      expect(policy.split(part), part).toHaveLength(2);
+    }
+    expect(headers["x-content-type-options"]).toBe("nosniff");
+    expect(headers["referrer-policy"]).toBe("same-origin");
+    expect(headers["permissions-policy"]).toContain("geolocation=()");
+    expect(headers["x-powered-by"]).toBeUndefined();
+  });
+}

@@ -63,6 +63,10 @@ test.each([
   ["KEYPEG_PUBLIC_ORIGIN", "ftp://keypeg.example"],
   ["KEYPEG_DEMO", "yes"],
   ["KEYPEG_LOG_LEVEL", "loud"],
+  ["KEYPEG_TRUSTED_PROXIES", "10.0.0.1,the-proxy"],
+  ["PORT", "http"],
+  ["PORT", "70000"],
+  ["PORT", "41.8"],
 ])("%s=%s is refused by name, without repeating the value", (name, value) => {
   const lines = linesOf(refusal({ ...complete, [name]: value }));
   expect(lines).toHaveLength(1);
@@ -87,4 +91,27 @@ test.each([
   expect(message).not.toContain(value);
   expect(refusal({ ...env, KEYPEG_DEMO: "0" })).toBe(message);
   expect(readConfig({ ...env, KEYPEG_DEMO: "1" }).demo).toBe(true);
+});
+
+test("outside the demo a production server is reached over TLS, or on its own machine", () => {
+  const at = (origin: string) => ({
+    ...complete,
+    KEYPEG_PUBLIC_ORIGIN: origin,
+    NODE_ENV: "production",
+  });
+  const open = at("http://keypeg.example");
+  expect(refusal(open)).toContain("KEYPEG_PUBLIC_ORIGIN must begin with https://");
+  expect(readConfig({ ...open, KEYPEG_DEMO: "1" }).publicOrigin).toBe("http://keypeg.example");
+  expect(readConfig(at("http://127.0.0.1:4180")).publicOrigin).toBe("http://127.0.0.1:4180");
+});
+
+test("where to listen and which proxies to believe are read from the environment", () => {
+  expect(readConfig(complete).listen).toEqual({
+    host: "127.0.0.1",
+    port: 4180,
+    trustedProxies: [],
+  });
+  const told = { HOST: "::", PORT: "80", KEYPEG_TRUSTED_PROXIES: "10.0.0.1, ::1," };
+  const { listen } = readConfig({ ...complete, ...told });
+  expect(listen).toEqual({ host: "::", port: 80, trustedProxies: ["10.0.0.1", "::1"] });
 });
