@@ -12,9 +12,7 @@ import type { Actor } from "../actor";
 import { writeChanges } from "../feed";
 import { ok, type Result, refuse } from "../refusals";
 import { writeSetupAudit } from "../trucks/setup-audit";
-
-const line = (code: string, most: number) =>
-  z.string({ error: code }).trim().min(1, code).max(most, code);
+import { typedLine } from "../typed-line";
 
 export const ownCheckSchema = z.object({
   /** Made with the form, so that a form sent twice is one check. */
@@ -23,8 +21,8 @@ export const ownCheckSchema = z.object({
   truckId: z.uuid("truck-unknown").nullable().default(null),
   station: z.enum(STATIONS, { error: "station-unknown" }),
   cadence: z.enum(CADENCES, { error: "cadence-unknown" }),
-  label: line("own-check-label", 80),
-  good: line("own-check-good", 160),
+  label: typedLine("own-check-label", 1, 80),
+  good: typedLine("own-check-good", 1, 160),
   colour: z.enum(COLOURS, { error: "colour-unknown" }),
 });
 export type OwnCheckInput = z.infer<typeof ownCheckSchema>;

@@ -1,5 +1,6 @@
 import { z } from "zod";
 import { ROLES } from "../actor";
+import { typedLine } from "../typed-line";
 
 /** An e-mail address, lower-cased: one person, however it was typed. */
 export const emailSchema = z
@@ -9,14 +10,10 @@ export const emailSchema = z
   .max(254, "email-form")
   .pipe(z.email({ error: "email-form" }));
 
-export const personNameSchema = z
-  .string({ error: "person-name" })
-  .trim()
-  .min(2, "person-name")
-  .max(80, "person-name");
+export const personNameSchema = typedLine("person-name", 2, 80);
 
 export const phoneSchema = z
-  .string()
+  .string({ error: "phone-form" })
   .trim()
   .regex(/^[+()\d .-]{3,32}$/, "phone-form")
   .nullable()

@@ -12,13 +12,13 @@ import {
 
 const amount = z.object({
   value: typedNumberOptional,
-  unit: z.string().max(12).optional(),
+  unit: z.string({ error: "unknown-unit" }).max(12, "unknown-unit").optional(),
 });
 
 /** Values of a plate as typed, by attribute. Which of them a kind takes is in `fittingFields`. */
 export const typedAttributesSchema = z.object({
-  type: z.string().max(40).optional(),
-  grade: z.string().max(40).optional(),
+  type: z.string({ error: "choice-unknown" }).max(40, "choice-unknown").optional(),
+  grade: z.string({ error: "choice-unknown" }).max(40, "choice-unknown").optional(),
   count: typedNumberOptional,
   specificationPlate: z.boolean().optional(),
   fullOpeningRear: z.boolean().optional(),

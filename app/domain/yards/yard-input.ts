@@ -1,6 +1,7 @@
 import { z } from "zod";
 import { fromSi, groupOf, isUnit, toSi, unitsOf } from "../../trade/units";
 import type { FieldFault } from "../refusals";
+import { typedLine } from "../typed-line";
 import { typedNumber } from "../typed-number";
 import { isZone } from "../yard-day";
 
@@ -26,10 +27,10 @@ const phone = z.preprocess(
 );
 
 export const yardSchema = z.object({
-  name: z.string({ error: "yard-name" }).trim().min(1, "yard-name").max(80, "yard-name"),
+  name: typedLine("yard-name", 1, 80),
   zone: z.string({ error: "zone-unknown" }).refine(isZone, "zone-unknown"),
   elevation: typedNumber,
-  elevationUnit: z.string({ error: "unknown-unit" }).max(12),
+  elevationUnit: z.string({ error: "unknown-unit" }).max(12, "unknown-unit"),
   phone: phone.default(null),
   shopOpens,
   winter: z.boolean().default(false),

@@ -19,6 +19,8 @@ export const SETUP_FAULTS: Record<string, string | ((values: FaultValues) => str
   "yard-unknown": "Choose one of your yards.",
   "start-unknown": "Choose one of the usual trucks, or start with nothing fitted.",
 
+  unprintable: "There are characters in it that cannot be printed. Type it anew.",
+
   "fitting-kind-unknown": "Choose a fitting from the list.",
   "fitting-only-one": "This truck has one already. Change that one, or remove it first.",
   "fitting-gone": "This fitting was removed. Restore it before changing it.",
