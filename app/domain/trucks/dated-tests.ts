@@ -38,6 +38,7 @@ export function testsFor(kind: UnitKind, fitted: readonly Fitting[]): RequiredTe
 }
 
 export interface RecordedTest {
+  id: string;
   kind: string;
   passedOn: string | null;
   dueOn: string;
@@ -48,6 +49,7 @@ export interface RecordedTest {
 export async function readTests(db: Db, key: TruckKey): Promise<RecordedTest[]> {
   const rows = await db
     .select({
+      id: datedTests.id,
       kind: datedTests.kind,
       passedOn: datedTests.passedOn,
       dueOn: datedTests.dueOn,

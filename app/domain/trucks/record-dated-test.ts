@@ -9,8 +9,9 @@ import { changeTruck, type GateChange } from "../gate/change-truck";
 import type { TruckKey } from "../gate/read-facts";
 import { type FieldFault, ok, type Result } from "../refusals";
 import { yardOfTruck } from "../tags/yard-of-truck";
+import { typedLine } from "../typed-line";
 import { yardDay } from "../yard-day";
-import { isDatedTest, NO_LONGER_DUE, readTests, testsFor } from "./dated-tests";
+import { isDatedTest, NO_LONGER_DUE, type RecordedTest, readTests, testsFor } from "./dated-tests";
 import { readFittings, readTruck } from "./read-setup";
 import { writeSetupAudit } from "./setup-audit";
 
@@ -25,7 +26,7 @@ export const datedTestSchema = z.object({
   passedOn: day.default(null),
   /** Its last day; left out, the rule's own interval. */
   dueOn: day.default(null),
-  note: z.string().trim().max(200, "note-long").nullable().default(null),
+  note: typedLine("note-long", 0, 200).nullable().default(null),
 });
 export type DatedTestInput = z.infer<typeof datedTestSchema> & { truckId: string };
 
@@ -68,8 +69,10 @@ export async function recordDatedTest(
     key,
     async (change) => {
       const dueOn = await judge(change, key, input);
-      const id = uuidv7();
       const row = { kind, passedOn, dueOn, note: note || null };
+      const newest = (await readTests(change.tx, key)).find((test) => test.kind === kind);
+      if (newest && isSame(newest, row)) throw new RecordedBefore(newest.id, dueOn);
+      const id = uuidv7();
       await change.tx.insert(datedTests).values({
         ...key,
         ...row,
@@ -82,8 +85,25 @@ export async function recordDatedTest(
       return { id, dueOn };
     },
     { clock },
-  );
+  ).catch((error: unknown) => {
+    if (error instanceof RecordedBefore) return ok({ value: { id: error.id, dueOn: error.dueOn } });
+    throw error;
+  });
   return changed.ok ? ok(changed.value.value) : changed;
+}
+
+/** Rolls back what a form sent before would do a second time: one test is one record. */
+class RecordedBefore extends Error {
+  constructor(
+    readonly id: string,
+    readonly dueOn: string,
+  ) {
+    super("recorded before");
+  }
+}
+
+function isSame(one: RecordedTest, other: Omit<RecordedTest, "id">): boolean {
+  return one.passedOn === other.passedOn && one.dueOn === other.dueOn && one.note === other.note;
 }
 
 /** May the office stop asking for it? Not while the law asks for it on this unit. */

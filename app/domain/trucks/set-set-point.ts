@@ -20,7 +20,7 @@ import { writeSetupAudit } from "./setup-audit";
 
 export const setSetPointSchema = z.object({
   reading: z.string({ error: "reading-unknown" }).max(40),
-  unit: z.string({ error: "unknown-unit" }).max(12),
+  unit: z.string({ error: "unknown-unit" }).max(12, "unknown-unit"),
   setPoint: typedNumber,
   low: typedNumberOrNone,
   high: typedNumberOrNone,
@@ -77,6 +77,9 @@ export async function setSetPoint(
     key,
     async (change): Promise<SetPointSet> => {
       const { tx } = change;
+      // Pressed twice, both may have come past the look above: here one waits for the other.
+      const held = (await readSetPointRows(tx, key)).find((row) => row.reading === typed.reading);
+      if (held && sameAs(typed, held)) throw new SetBefore("set before");
       const yard = await yardOfTruck(tx, key.carrierId, truckId);
       const verdict = judgeSetPoint(typed, await readFittings(tx, key), yard);
       if (!verdict.ok) {
@@ -116,9 +119,15 @@ export async function setSetPoint(
       };
     },
     { clock, setup: true },
-  );
+  ).catch((error: unknown) => {
+    if (error instanceof SetBefore) return ok({ value: { changed: false, greatestHere: null } });
+    throw error;
+  });
   return changed.ok ? ok(changed.value.value) : changed;
 }
+
+/** Rolls back what would end walks for nothing. */
+class SetBefore extends Error {}
 
 /** A set point is taken away: the half of the run-up that needs it cannot be run until there is one. */
 export async function removeSetPoint(

@@ -11,7 +11,7 @@ import { readPolicy } from "../policy/read-policy";
 import { ok, type Result, refuse } from "../refusals";
 import { Refused } from "../refused";
 import { writeSetupAudit } from "../trucks/setup-audit";
-import { nameIsTaken, readYard, thatYard } from "./read-yards";
+import { holdYardNames, nameIsTaken, readYard, thatYard } from "./read-yards";
 import { readElevation, type YardInput } from "./yard-input";
 
 /** Every truck of the yard is written before anything is read; other air means another sheet. */
@@ -52,6 +52,7 @@ export async function changeYard(
   try {
     await inTransaction(db, async (tx) => {
       await bumpTrucks(tx, carrierId, yardId, elevationM);
+      await holdYardNames(tx, carrierId);
       if (await nameIsTaken(tx, carrierId, name, yardId)) {
         const fields = [{ pointer: "/name", code: "yard-name-taken" }];
         throw new Refused(refuse("invalid", { fields }).refusal);

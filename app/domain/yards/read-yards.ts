@@ -1,6 +1,6 @@
 import { and, asc, eq, ne, sql } from "drizzle-orm";
 import type { Db } from "../../db/client";
-import { yards } from "../../db/schema/carriers";
+import { feedHeads, yards } from "../../db/schema/carriers";
 import { trucks } from "../../db/schema/trucks";
 import type { Actor } from "../actor";
 
@@ -15,6 +15,15 @@ export async function readYard(db: Db, carrierId: string, yardId: string) {
 }
 
 /** Two yards of one name would be one name for two places. */
+/** Until this transaction ends nobody else of this carrier asks whether a yard's name is free. */
+export async function holdYardNames(tx: Db, carrierId: string): Promise<void> {
+  await tx
+    .select({ carrierId: feedHeads.carrierId })
+    .from(feedHeads)
+    .where(eq(feedHeads.carrierId, carrierId))
+    .for("update");
+}
+
 export async function nameIsTaken(db: Db, carrierId: string, name: string, except: string | null) {
   const [same] = await db
     .select({ id: yards.id })
