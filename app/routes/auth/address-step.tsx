@@ -2,7 +2,8 @@ import { getFormProps, getInputProps, type SubmissionResult, useForm } from "@co
 import { Form, useNavigation } from "react-router";
 import { signInPath } from "~/auth/next-path";
 import { signInText } from "~/text/en/auth";
-import { DoorButton, DoorField } from "./door-form";
+import { refusalText } from "~/text/en/refusals";
+import { DoorButton, DoorField, Fault } from "./door-form";
 
 interface AddressStepProps {
   email: string;
@@ -37,6 +38,10 @@ export function AddressStep({ email, next, result }: AddressStepProps) {
           spellCheck: false,
         }}
       />
+      {/* A code that led back here: it was used, or replaced by a newer one. */}
+      {result?.error?.code?.map((words) => (
+        <Fault key={words}>{refusalText.field(words)}</Fault>
+      ))}
       <DoorButton busy={busy} busyLabel={signInText.sending}>
         {signInText.send}
       </DoorButton>

@@ -27,7 +27,8 @@ export function SelectField({
     <Field field={field} label={label} hint={hint} optional={optional}>
       <select
         key={field.key}
-        defaultValue={startOf(field)}
+        // An empty choice comes back as nothing, and is a choice all the same.
+        defaultValue={startOf(field) ?? ""}
         {...controlProps(field, hint)}
         data-alone={alone || undefined}
         className={`${CONTROL} w-full`}
