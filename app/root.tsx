@@ -4,10 +4,15 @@ import { Links, Meta, Outlet, Scripts, ScrollRestoration } from "react-router";
 import type { Route } from "./+types/root";
 import { crossSiteMiddleware } from "./auth/cross-site";
 import { sessionMiddleware } from "./auth/session";
+import { readableFormMiddleware } from "./http/readable-form";
 import { RootError } from "./ui/root-error";
 import { ThemeScript } from "./ui/theme-switch";
 
-export const middleware: Route.MiddlewareFunction[] = [crossSiteMiddleware, sessionMiddleware];
+export const middleware: Route.MiddlewareFunction[] = [
+  crossSiteMiddleware,
+  readableFormMiddleware,
+  sessionMiddleware,
+];
 
 export function Layout({ children }: { children: ReactNode }) {
   return (
