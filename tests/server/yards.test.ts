@@ -98,7 +98,10 @@ test("a zone nobody knows, a bad clock, telephone or name is refused with words 
 
 test("two yards of one firm do not share a name; two firms may", async () => {
   const yardId = await newYard({ name: "North Yard" });
-  const again = await addYard(testDb(), manager, typed({ name: "North Yard" }), clock);
+  const sentTwice = await addYard(testDb(), manager, typed({ name: "North Yard" }), clock);
+  expect(sentTwice).toEqual({ ok: true, value: { id: yardId } });
+  const otherClock = typed({ name: "North Yard", shopOpens: "07:15" });
+  const again = await addYard(testDb(), manager, otherClock, clock);
   expect(faults(again)["/name"]).toContain("another name");
   const other = await newYard({ name: "South Yard" });
   const renamed = { ...typed({ name: "North Yard" }), yardId: other };
