@@ -4,7 +4,7 @@ import { yards } from "../../db/schema/carriers";
 import { handovers, returns } from "../../db/schema/handovers";
 import { acknowledgements, runLimits, signOffs, tagChanges, tags } from "../../db/schema/tags";
 import { datedTests, rounds, trucks } from "../../db/schema/trucks";
-import { readings, walks } from "../../db/schema/walks";
+import { walks } from "../../db/schema/walks";
 import type { Fitting, FittingKind } from "../../trade/fittings";
 import { cannotDo } from "../../trade/sheet/cannot-do";
 import type { StandingFacts, TagFact } from "../../trade/standing/facts";
@@ -12,6 +12,7 @@ import { hours } from "../durations";
 import type { PolicySettings } from "../policy/settings";
 import { asItHangs } from "../tags/as-it-hangs";
 import { testsFor } from "../trucks/dated-tests";
+import { lastPumpHours } from "../trucks/pump-hours";
 import { readFittings } from "../trucks/read-setup";
 import { addDays, yardDay, yardInstant } from "../yard-day";
 import { roundFacts, testFacts, type YardClock } from "./due-facts";
@@ -207,22 +208,6 @@ async function readDues(db: Db, key: TruckKey) {
   return { done, newest: [...new Map(tests.map((test) => [test.kind, test])).values()] };
 }
 
-async function readPumpHours(db: Db, key: TruckKey) {
-  const [hoursRow] = await db
-    .select({ si: readings.si })
-    .from(readings)
-    .where(
-      and(
-        eq(readings.carrierId, key.carrierId),
-        eq(readings.truckId, key.truckId),
-        eq(readings.quantity, "pump-hours"),
-      ),
-    )
-    .orderBy(desc(readings.countsFrom), desc(readings.id))
-    .limit(1);
-  return hoursRow?.si ?? 0;
-}
-
 /** The coupling is looked at with its guard off: shop work, on every drive that has one. */
 export function needsShopWeekly(fitted: readonly Fitting[]): boolean {
   const drive = fitted.find((fitting) => fitting.kind === "drive")?.attributes.type;
@@ -251,7 +236,7 @@ export async function readFacts(
   const seen = await readSeen(db, key, since);
   const dayEnds = await readDayEnds(db, key, now);
   const dues = await readDues(db, key);
-  const pumpHours = await readPumpHours(db, key);
+  const pumpHours = (await lastPumpHours(db, key)) ?? 0;
   const fitted = await readFittings(db, key);
   const has = (kind: FittingKind) => fitted.some((fitting) => fitting.kind === kind);
   const byLaw = testsFor(truck.kind, fitted).filter((required) => required.byLaw);

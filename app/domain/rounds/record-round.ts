@@ -1,4 +1,3 @@
-import { and, desc, eq, lte } from "drizzle-orm";
 import { z } from "zod";
 import type { Db } from "../../db/client";
 import { rounds } from "../../db/schema/trucks";
@@ -8,10 +7,10 @@ import { ROUND_KINDS } from "../../trade/rounds";
 import type { StandingWord } from "../../trade/standing/standing";
 import type { Actor } from "../actor";
 import { changeTruck } from "../gate/change-truck";
-import type { TruckKey } from "../gate/read-facts";
 import { once, submissionOf } from "../receipts/once";
 import { ok, type Result } from "../refusals";
 import { yardOfTruck } from "../tags/yard-of-truck";
+import { lastPumpHours } from "../trucks/pump-hours";
 import { addDays, yardDay, yardInstant } from "../yard-day";
 
 export const recordRoundSchema = z.object({
@@ -27,24 +26,6 @@ export type RecordRoundInput = z.infer<typeof recordRoundSchema>;
 function endOfDay(day: string, zone: string, now: Date): Date {
   const end = yardInstant(addDays(day, 1), 0, zone);
   return end < now ? end : now;
-}
-
-/** The pump's hours as last read before an instant: a round done without them counts from there. */
-async function hoursAt(tx: Db, key: TruckKey, at: Date): Promise<number | null> {
-  const [row] = await tx
-    .select({ si: readings.si })
-    .from(readings)
-    .where(
-      and(
-        eq(readings.carrierId, key.carrierId),
-        eq(readings.truckId, key.truckId),
-        eq(readings.quantity, "pump-hours"),
-        lte(readings.countsFrom, at),
-      ),
-    )
-    .orderBy(desc(readings.countsFrom), desc(readings.id))
-    .limit(1);
-  return row?.si ?? null;
 }
 
 /** A weekly or monthly round done at the bench. A day to come is refused. */
@@ -67,7 +48,7 @@ export async function recordRound(
           change.deny("invalid", { fields: [{ pointer: "/doneOn", code: "date-future" }] });
         }
         const readAt = endOfDay(input.doneOn, zone, change.now);
-        const pumpHours = input.pumpHours ?? (await hoursAt(change.tx, key, readAt));
+        const pumpHours = input.pumpHours ?? (await lastPumpHours(change.tx, key, readAt));
         await change.tx.insert(rounds).values({
           ...key,
           id: input.id,
