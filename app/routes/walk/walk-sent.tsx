@@ -22,9 +22,10 @@ export function WalkSent({
       .map((check) => `${station.label}: ${check.label}`),
   );
   const clears = sent.clearsNot === null;
+  const tone = sent.standing === "held" ? "stop" : clears ? "good" : "limit";
   return (
     <section ref={box} tabIndex={-1} aria-labelledby="sent" className="space-y-4 outline-none">
-      <Notice announce tone={clears ? "good" : "limit"}>
+      <Notice announce tone={tone}>
         <h2 id="sent" className="font-bold">
           {walkText.receipt(standingText[sent.standing])}
         </h2>
